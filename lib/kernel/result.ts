@@ -1,0 +1,5 @@
+/** A refusal is a value (DEVELOPERS.md, "Errors"): what a user can cause stands in the return type. */
+export type Result<T, E> = { readonly ok: true; readonly value: T } | { readonly ok: false; readonly error: E };
+
+export const ok = <T>(value: T): { readonly ok: true; readonly value: T } => ({ ok: true, value });
+export const err = <E>(error: E): { readonly ok: false; readonly error: E } => ({ ok: false, error });
