@@ -1,0 +1,125 @@
+import { z } from 'zod';
+import { condition } from './condition-schema';
+import type { Sheet } from './domain/sheet';
+import { payload } from './payload-schema';
+export { calendarDate, regionCode } from './word-schema';
+import { calendarDate, evidence, lang, regionCode, slug, words } from './word-schema';
+
+const openDate = calendarDate.nullable().default(null);
+const standing = z.enum(['law', 'guidance', 'standard', 'lab', 'common-practice']);
+
+const source = z.strictObject({
+  id: slug,
+  title: words,
+  publisher: words,
+  identifier: words.exactOptional(),
+  url: z.url().exactOptional(),
+  versionDate: words.exactOptional(),
+  seenOn: calendarDate.exactOptional(),
+  seenVia: words.exactOptional(),
+});
+
+const citation = z
+  .strictObject({
+    source: slug,
+    locator: words.exactOptional(),
+    passage: words.exactOptional(),
+    passageLang: lang.exactOptional(),
+    standing,
+    evidence,
+  })
+  .refine((it) => (it.passage === undefined) === (it.passageLang === undefined), { error: 'A passage needs its language, passageLang' });
+
+const rule = z
+  .strictObject({
+    id: slug,
+    region: regionCode,
+    kind: z.enum(['adds', 'replaces', 'excepts']),
+    targets: z.array(slug).default([]),
+    alongside: z.array(slug).default([]),
+    when: condition,
+    from: openDate,
+    to: openDate,
+    order: z.int(),
+    firm: z.boolean().default(false),
+    strength: z.enum(['must', 'should', 'may', 'note']),
+    standing,
+    title: words.max(120),
+    says: words.max(1200),
+    payload,
+    sources: z.array(citation).min(1, 'Every rule needs a source'),
+    facts: z.array(slug).default([]),
+    lookAgainBy: calendarDate,
+    note: words.exactOptional(),
+  })
+  .superRefine((it, ctx) => {
+    const say = (path: string, message: string) => { ctx.addIssue({ code: 'custom', path: [path], message }); };
+    if ((it.kind === 'adds') !== (it.targets.length === 0)) say('targets', 'Only rules that replace or except have targets, and those need one');
+    if (it.from !== null && it.to !== null && it.from >= it.to) say('to', 'The end must come after the start');
+    const first = it.sources[0];
+    if (first?.standing !== it.standing) say('standing', 'The standing is that of the first source');
+    if (it.strength === 'must' && (it.standing !== 'law' || first?.evidence !== 'read')) say('strength', 'A must needs law that was read');
+    if (it.standing === 'guidance' && it.strength === 'must') say('strength', 'Guidance gives should, may or note');
+    if (it.standing === 'common-practice') {
+      if (it.strength !== 'note' || it.when !== true) say('standing', 'Common practice has strength "note" and applies always');
+    }
+  });
+
+const term = z.strictObject({
+  id: slug,
+  region: regionCode,
+  name: words,
+  says: words,
+  category: z.boolean().default(false),
+  when: condition,
+  from: openDate,
+  to: openDate,
+  sources: z.array(citation).default([]),
+  facts: z.array(slug).default([]),
+});
+
+const contact = z.strictObject({ name: words, url: z.url().nullable(), role: words, evidence });
+
+export const membership = z.strictObject({
+  parent: regionCode,
+  from: openDate,
+  to: openDate,
+  except: z.array(z.strictObject({ rule: slug, why: words })).default([]),
+});
+
+/** The document of a sheet: what a seed file holds and what an edition keeps. Fills in defaults; refuses unknown members. */
+export const sheetDocument = z
+  .strictObject({
+    code: regionCode,
+    name: words,
+    kind: z.enum(['bloc', 'country', 'part', 'standard', 'base']),
+    languages: z.array(lang),
+    memberships: z
+      .array(membership)
+      .default([]),
+    text: words,
+    textFacts: z.array(slug).default([]),
+    authorities: z.array(contact),
+    accreditation: z.array(contact),
+    gaps: z.array(words).default([]),
+    sources: z.array(source),
+    terms: z.array(term).default([]),
+    rules: z.array(rule),
+    leftOut: z.array(z.strictObject({ fact: slug, why: words })).default([]),
+  })
+  .superRefine((sheet, ctx) => {
+    const say = (path: PropertyKey[], message: string) => { ctx.addIssue({ code: 'custom', path, message }); };
+    const known = new Set(sheet.sources.map(({ id }) => id));
+    const seen = new Set<string>();
+    const lists = [['rules', sheet.rules], ['terms', sheet.terms]] as const;
+    for (const [list, items] of lists) {
+      items.forEach((item, index) => {
+        if (item.region !== sheet.code) say([list, index, 'region'], `This sheet is of "${sheet.code}"`);
+        if (seen.has(item.id)) say([list, index, 'id'], `"${item.id}" stands here twice`);
+        seen.add(item.id);
+        item.sources.forEach((cited, place) => {
+          if (!known.has(cited.source)) say([list, index, 'sources', place, 'source'], `There is no source "${cited.source}" in this sheet`);
+        });
+      });
+    }
+  }) satisfies z.ZodType<Sheet>;

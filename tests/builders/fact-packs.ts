@@ -1,0 +1,31 @@
+import { readdirSync, readFileSync } from 'node:fs';
+import { z } from 'zod';
+
+/*
+ * Researched facts of law and practice, each with its source and whether it was read: the outside to check the sheets against.
+ */
+const fact = z.looseObject({
+  id: z.string(),
+  topic: z.string(),
+  evidence: z.enum(['read', 'memory', 'common-practice']),
+  never_must: z.array(z.string()).default([]),
+  values: z.record(z.string(), z.unknown()).default({}),
+});
+export type Fact = z.output<typeof fact>;
+
+const pack = z.looseObject({
+  regions: z.array(z.looseObject({ code: z.string(), facts: z.array(fact) })).default([]),
+  facts: z.array(fact).default([]),
+});
+
+const FOLDER = new URL('../fixtures/facts/', import.meta.url);
+
+const packs = readdirSync(FOLDER)
+  .filter((name) => name.endsWith('.json'))
+  .map((name) => pack.parse(JSON.parse(readFileSync(new URL(name, FOLDER), 'utf8'))));
+
+/** Facts by the code of the sheet that should carry them; those of ceramics science belong to `care`. */
+export const factsByRegion: ReadonlyMap<string, readonly Fact[]> = new Map([
+  ...packs.flatMap(({ regions }) => regions.map(({ code, facts }) => [code.toLowerCase(), facts] as const)),
+  ['care', packs.flatMap(({ facts }) => facts)] as const,
+]);
