@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { parseCalendarDate, type CalendarDate } from '@/lib/kernel/calendar-date';
+import { parseCalendarDate, type CalendarDate } from './calendar-date';
 
 export const regionCode = z
   .string()

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { QUESTIONS, type Question } from '@/lib/checks/domain/questions';
 import { baseUnit, isCurrency } from '@/lib/kernel/quantity';
 import type { Condition } from './domain/condition';
-import { regionCode, slug } from './word-schema';
+import { regionCode, slug } from '@/lib/kernel/shapes';
 
 const LIST: readonly Question[] = QUESTIONS;
 const BY_ID = new Map(LIST.map((question) => [question.id, question]));
@@ -24,19 +24,20 @@ const leaf = z.union([
 const tree: z.ZodType<Condition> = z.lazy(() =>
   z.union(
     [
-    z.boolean(),
-    z.strictObject({ all: z.array(tree).min(1) }),
-    z.strictObject({ any: z.array(tree).min(1) }),
-    z.strictObject({ not: tree }),
-    leaf,
-  ],
-    { error: 'A condition is true, false, {"all":[…]}, {"any":[…]}, {"not":…}, {"term":…}, or a question with is, in, lt, le, gt, ge or within' },
+      z.boolean(),
+      z.strictObject({ all: z.array(tree).min(1) }),
+      z.strictObject({ any: z.array(tree).min(1) }),
+      z.strictObject({ not: tree }),
+      leaf,
+    ],
+    {
+      error:
+        'A condition is true, false, {"all":[…]}, {"any":[…]}, {"not":…}, {"term":…}, or a question with is, in, lt, le, gt, ge or within',
+    },
   ),
 );
 
-type Question_ = { readonly question: string };
-const asks = (condition: Condition): condition is Extract<Condition, Question_> =>
-  typeof condition === 'object' && 'question' in condition;
+const asks = (condition: Condition): condition is Leaf => typeof condition === 'object' && 'question' in condition;
 
 const partsOf = (condition: Condition): readonly Condition[] => {
   if (typeof condition === 'boolean') return [];
@@ -50,36 +51,65 @@ const leavesOf = (condition: Condition): readonly Condition[] => {
   return parts.length === 0 ? [condition] : parts.flatMap(leavesOf);
 };
 
-const boundOf = (node: Extract<Condition, Question_>): { readonly unit: string } | null => {
+type Leaf = Extract<Condition, { readonly question: string }>;
+
+const boundOf = (node: Leaf): { readonly unit: string } | null => {
   if ('lt' in node) return node.lt;
   if ('le' in node) return node.le;
   if ('gt' in node) return node.gt;
   return 'ge' in node ? node.ge : null;
 };
 
+const valuesOf = (node: Leaf): readonly (string | boolean)[] => {
+  if ('is' in node) return [node.is];
+  return 'in' in node ? node.in : [];
+};
+
+/** Whether the leaf names options of its question, and nothing else. */
+const namesOptions = (node: Leaf, options: readonly string[]): boolean => {
+  const values = valuesOf(node);
+  return values.length > 0 && values.every((value) => typeof value === 'string' && options.includes(value));
+};
+
+const isYesNo = (node: Leaf): boolean => 'is' in node && typeof node.is === 'boolean';
+const boundUnit = (node: Leaf): string | null => boundOf(node)?.unit ?? null;
+
 /** Null when the leaf asks its question in a way that question can be asked, else what is wrong. */
-function faultOfLeaf(node: Extract<Condition, Question_>): string | null {
+function faultOfLeaf(node: Leaf): string | null {
   const question = BY_ID.get(node.question);
   if (question === undefined) return `There is no question "${node.question}"`;
-  const bound = boundOf(node);
+  return isAskedRight(question, node) ? null : howToAsk(question);
+}
+
+function isAskedRight(question: Question, node: Leaf): boolean {
   switch (question.kind) {
     case 'yesno':
-      return 'is' in node && typeof node.is === 'boolean' ? null : `"${question.id}" is answered yes or no: use {"is":true} or {"is":false}`;
+      return isYesNo(node);
     case 'choice':
-    case 'several': {
-      const values: readonly (string | boolean)[] = 'is' in node ? [node.is] : 'in' in node ? node.in : [];
-      const strange = values.find((value) => typeof value !== 'string' || !question.options.includes(value));
-      if (values.length === 0 || strange !== undefined) return `"${question.id}" takes one of: ${question.options.join(', ')}`;
-      return null;
-    }
+    case 'several':
+      return namesOptions(node, question.options);
     case 'amount':
-      return bound !== null && baseUnit(bound.unit) === baseUnit(question.unit)
-        ? null
-        : `"${question.id}" is compared (lt, le, gt, ge) with a value in ${question.unit}`;
+      return baseUnit(boundUnit(node) ?? '') === baseUnit(question.unit);
     case 'money':
-      return bound !== null && isCurrency(bound.unit) ? null : `"${question.id}" is compared with an amount in a currency, such as DKK`;
+      return isCurrency(boundUnit(node) ?? '');
     case 'region':
-      return 'within' in node ? null : `"${question.id}" asks {"within": a region code}`;
+      return 'within' in node;
+  }
+}
+
+function howToAsk(question: Question): string {
+  switch (question.kind) {
+    case 'yesno':
+      return `"${question.id}" is answered yes or no: use {"is":true} or {"is":false}`;
+    case 'choice':
+    case 'several':
+      return `"${question.id}" takes one of: ${question.options.join(', ')}`;
+    case 'amount':
+      return `"${question.id}" is compared (lt, le, gt, ge) with a value in ${question.unit}`;
+    case 'money':
+      return `"${question.id}" is compared with an amount in a currency, such as DKK`;
+    case 'region':
+      return `"${question.id}" asks {"within": a region code}`;
   }
 }
 

@@ -1,10 +1,16 @@
 import { z } from 'zod';
 import { NOTE_TOPICS, type Payload } from './domain/rule';
-import { calendarDate, evidence, lang, words } from './word-schema';
+import { calendarDate, evidence, lang, words } from '@/lib/kernel/shapes';
 
 const tolerance = z.strictObject({ value: z.number(), plusMinus: z.number().nonnegative() });
 const money = z.strictObject({ amount: z.string().regex(/^\d{1,15}(\.\d{1,6})?$/), currency: z.string().regex(/^[A-Z]{3}$/) });
-const note = { who: words.exactOptional(), where: words.exactOptional(), by: words.exactOptional(), link: z.url().exactOptional(), details: words.exactOptional() };
+const note = {
+  who: words.exactOptional(),
+  where: words.exactOptional(),
+  by: words.exactOptional(),
+  link: z.url().exactOptional(),
+  details: words.exactOptional(),
+};
 const details = words.exactOptional();
 
 const LIMIT_UNITS: Readonly<Record<string, readonly string[]>> = {
@@ -47,7 +53,12 @@ export const payload = z.discriminatedUnion('topic', [
     reporting: words.exactOptional(),
     details,
   }),
-  z.strictObject({ topic: z.literal('firing'), leastPeakC: z.number().positive().exactOptional(), glazedInside: z.boolean().exactOptional(), details }),
+  z.strictObject({
+    topic: z.literal('firing'),
+    leastPeakC: z.number().positive().exactOptional(),
+    glazedInside: z.boolean().exactOptional(),
+    details,
+  }),
   z.strictObject({
     topic: z.literal('volume-threshold'),
     mostPiecesAYear: z.int().positive().exactOptional(),

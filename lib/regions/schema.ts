@@ -1,9 +1,10 @@
 import { z } from 'zod';
 import { condition } from './condition-schema';
+import type { Rule } from './domain/rule';
 import type { Sheet } from './domain/sheet';
 import { payload } from './payload-schema';
-export { calendarDate, regionCode } from './word-schema';
-import { calendarDate, evidence, lang, regionCode, slug, words } from './word-schema';
+export { calendarDate, regionCode } from '@/lib/kernel/shapes';
+import { calendarDate, evidence, lang, regionCode, slug, words } from '@/lib/kernel/shapes';
 
 const openDate = calendarDate.nullable().default(null);
 const standing = z.enum(['law', 'guidance', 'standard', 'lab', 'common-practice']);
@@ -53,17 +54,36 @@ const rule = z
     note: words.exactOptional(),
   })
   .superRefine((it, ctx) => {
-    const say = (path: string, message: string) => { ctx.addIssue({ code: 'custom', path: [path], message }); };
-    if ((it.kind === 'adds') !== (it.targets.length === 0)) say('targets', 'Only rules that replace or except have targets, and those need one');
-    if (it.from !== null && it.to !== null && it.from >= it.to) say('to', 'The end must come after the start');
-    const first = it.sources[0];
-    if (first?.standing !== it.standing) say('standing', 'The standing is that of the first source');
-    if (it.strength === 'must' && (it.standing !== 'law' || first?.evidence !== 'read')) say('strength', 'A must needs law that was read');
-    if (it.standing === 'guidance' && it.strength === 'must') say('strength', 'Guidance gives should, may or note');
-    if (it.standing === 'common-practice') {
-      if (it.strength !== 'note' || it.when !== true) say('standing', 'Common practice has strength "note" and applies always');
-    }
+    for (const [path, message] of [...faultsOfSpan(it), ...faultsOfStanding(it)]) ctx.addIssue({ code: 'custom', path: [path], message });
   });
+
+type Fault = readonly [field: string, message: string];
+
+function faultsOfSpan({ kind, targets, from, to }: Pick<Rule, 'kind' | 'targets' | 'from' | 'to'>): readonly Fault[] {
+  const faults: Fault[] = [];
+  if ((kind === 'adds') !== (targets.length === 0))
+    faults.push(['targets', 'Only rules that replace or except have targets, and those need one']);
+  if (from !== null && to !== null && from >= to) faults.push(['to', 'The end must come after the start']);
+  return faults;
+}
+
+/** What a strength may rest on (product rule H2). */
+function faultsOfStanding({
+  strength,
+  standing,
+  sources,
+  when,
+}: Pick<Rule, 'strength' | 'standing' | 'sources' | 'when'>): readonly Fault[] {
+  const [first] = sources;
+  const wasRead = first?.evidence === 'read';
+  const checks: readonly (readonly [wrong: boolean, ...fault: Fault])[] = [
+    [first?.standing !== standing, 'standing', 'The standing is that of the first source'],
+    [strength === 'must' && !(standing === 'law' && wasRead), 'strength', 'A must needs law that was read'],
+    [standing === 'common-practice' && strength !== 'note', 'strength', 'Common practice has strength "note"'],
+    [standing === 'common-practice' && when !== true, 'when', 'Common practice applies always'],
+  ];
+  return checks.flatMap(([wrong, field, message]): readonly Fault[] => (wrong ? [[field, message]] : []));
+}
 
 const term = z.strictObject({
   id: slug,
@@ -94,9 +114,7 @@ export const sheetDocument = z
     name: words,
     kind: z.enum(['bloc', 'country', 'part', 'standard', 'base']),
     languages: z.array(lang),
-    memberships: z
-      .array(membership)
-      .default([]),
+    memberships: z.array(membership).default([]),
     text: words,
     textFacts: z.array(slug).default([]),
     authorities: z.array(contact),
@@ -108,17 +126,23 @@ export const sheetDocument = z
     leftOut: z.array(z.strictObject({ fact: slug, why: words })).default([]),
   })
   .superRefine((sheet, ctx) => {
-    const say = (path: PropertyKey[], message: string) => { ctx.addIssue({ code: 'custom', path, message }); };
+    const say = (path: PropertyKey[], message: string) => {
+      ctx.addIssue({ code: 'custom', path, message });
+    };
     const known = new Set(sheet.sources.map(({ id }) => id));
     const seen = new Set<string>();
-    const lists = [['rules', sheet.rules], ['terms', sheet.terms]] as const;
+    const lists = [
+      ['rules', sheet.rules],
+      ['terms', sheet.terms],
+    ] as const;
     for (const [list, items] of lists) {
       items.forEach((item, index) => {
         if (item.region !== sheet.code) say([list, index, 'region'], `This sheet is of "${sheet.code}"`);
         if (seen.has(item.id)) say([list, index, 'id'], `"${item.id}" stands here twice`);
         seen.add(item.id);
         item.sources.forEach((cited, place) => {
-          if (!known.has(cited.source)) say([list, index, 'sources', place, 'source'], `There is no source "${cited.source}" in this sheet`);
+          if (!known.has(cited.source))
+            say([list, index, 'sources', place, 'source'], `There is no source "${cited.source}" in this sheet`);
         });
       });
     }

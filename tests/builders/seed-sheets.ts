@@ -42,7 +42,13 @@ export function seedLine(code: string, on: CalendarDate): LoadedLine {
     const { layers: own } = regionLine(memberships, place, on);
     return own.length > 1 ? [{ code: place, line: own }] : [];
   });
-  const compiled = compileLine({ questions: QUESTIONS, layers: layers.map((sheet) => ({ region: sheet.code, rules: sheet.rules, terms: sheet.terms })), except: line.except.map(({ rule }) => rule), on, places: known });
+  const compiled = compileLine({
+    questions: QUESTIONS,
+    layers: layers.map((sheet) => ({ region: sheet.code, rules: sheet.rules, terms: sheet.terms })),
+    except: line.except.map(({ rule }) => rule),
+    on,
+    places: known,
+  });
   if (!compiled.ok) throw new Error(`${code}: ${JSON.stringify(compiled.error)}`);
   return { code, line, layers: layers.map((sheet) => ({ sheet, edition: 1, hash: 'seed' })), compiled: compiled.value };
 }

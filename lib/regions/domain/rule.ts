@@ -63,7 +63,12 @@ export type MethodPayload = {
   readonly details?: string;
 };
 
-export type FiringPayload = { readonly topic: 'firing'; readonly leastPeakC?: number; readonly glazedInside?: boolean; readonly details?: string };
+export type FiringPayload = {
+  readonly topic: 'firing';
+  readonly leastPeakC?: number;
+  readonly glazedInside?: boolean;
+  readonly details?: string;
+};
 
 export type VolumePayload = {
   readonly topic: 'volume-threshold';
@@ -130,15 +135,7 @@ export type NotePayload = {
 };
 
 export type Payload =
-  | LimitPayload
-  | MethodPayload
-  | FiringPayload
-  | VolumePayload
-  | TestingPayload
-  | CostPayload
-  | LabelPayload
-  | PaperPayload
-  | NotePayload;
+  LimitPayload | MethodPayload | FiringPayload | VolumePayload | TestingPayload | CostPayload | LabelPayload | PaperPayload | NotePayload;
 
 /** One duty, advice or note of a region, with its condition, dates and sources. */
 export type Rule = {

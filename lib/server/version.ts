@@ -1,0 +1,3 @@
+import about from '@/package.json';
+
+export const version = about.version;
