@@ -14,7 +14,9 @@ const carriedBy = (rule: Rule) => rule.facts.flatMap((id) => all.get(id) ?? []);
 function figuresOf(values: Fact['values'], substance: string): readonly string[] {
   const list = z.array(z.record(z.string(), z.unknown())).safeParse(values['limits']);
   return [values, ...(list.success ? list.data : [])].flatMap((one) =>
-    'limit' in one && [one['symbol'], one['substance']].includes(substance) ? [`${String(one['limit'])} ${String(one['unit']).replace(' total content', '')}`] : [],
+    'limit' in one && [one['symbol'], one['substance']].includes(substance)
+      ? [`${String(one['limit'])} ${String(one['unit']).replace(' total content', '')}`]
+      : [],
   );
 }
 
@@ -29,13 +31,18 @@ describe.each(sheets.map((sheet) => [sheet.code, sheet] as const))('%s', (code, 
   test('REG-10 every researched fact is carried or left out with a reason, never both', () => {
     const carried = new Set([...sheet.rules, ...sheet.terms].flatMap(({ facts }) => facts).concat(sheet.textFacts));
     const leftOut = sheet.leftOut.map(({ fact }) => fact);
-    expect([...carried, ...leftOut].sort()).toEqual(factsOf(sheet).map(({ id }) => id).sort());
+    expect([...carried, ...leftOut].sort()).toEqual(
+      factsOf(sheet)
+        .map(({ id }) => id)
+        .sort(),
+    );
     expect(leftOut.filter((id) => carried.has(id))).toEqual([]);
   });
 
   test('REG-11 no fact that may never bind, and nothing from memory, becomes a must', () => {
     const wrong = sheet.rules.filter(
-      (rule) => rule.strength === 'must' && carriedBy(rule).some(({ evidence, never_must }) => evidence !== 'read' || never_must.length > 0),
+      (rule) =>
+        rule.strength === 'must' && carriedBy(rule).some(({ evidence, never_must }) => evidence !== 'read' || never_must.length > 0),
     );
     expect(wrong.map(({ id }) => id)).toEqual([]);
   });
@@ -64,7 +71,9 @@ describe.each(sheets.map((sheet) => [sheet.code, sheet] as const))('%s', (code, 
       expect(rule).toMatchObject({ standing: 'common-practice', strength: 'note', when: true });
     }
     for (const rule of sheet.rules.filter(({ standing }) => standing === 'common-practice')) {
-      const titles = rule.sources.filter((cited) => cited.standing === 'common-practice').map(({ source }) => sheet.sources.find(({ id }) => id === source)?.title);
+      const titles = rule.sources
+        .filter((cited) => cited.standing === 'common-practice')
+        .map(({ source }) => sheet.sources.find(({ id }) => id === source)?.title);
       expect(titles[0]).toBe('Common practice, no source');
     }
   });
@@ -89,5 +98,9 @@ test('REG-18 the not-for-food marking has its letter height: 3.2 mm in the USA, 
   const payload = (id: string) => sheets.flatMap(({ rules }) => rules).find((rule) => rule.id === id)?.payload;
   // 21 CFR 109.16(b)(1): letters of not less than 3.2 mm. SOR/2016-175 s. 6: capitals of at least 3 mm, English and French.
   expect(payload('us-decor-sticker')).toMatchObject({ topic: 'label', leastLetterMm: 3.2 });
-  expect(payload('ca-nonfood-warning')).toMatchObject({ topic: 'label', leastLetterMm: 3, words: { en: expect.any(String) as string, fr: expect.any(String) as string } });
+  expect(payload('ca-nonfood-warning')).toMatchObject({
+    topic: 'label',
+    leastLetterMm: 3,
+    words: { en: expect.any(String) as string, fr: expect.any(String) as string },
+  });
 });

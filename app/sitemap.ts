@@ -1,0 +1,15 @@
+import type { MetadataRoute } from 'next';
+import { connection } from 'next/server';
+import { listAddresses } from '@/lib/regions/list-addresses';
+import { makeCtx } from '@/lib/server/ctx';
+import { ownOrigin } from '@/lib/server/own-site';
+
+const STILL = ['/', '/check', '/regions', '/privacy', '/cautions', '/accessibility', '/contact'];
+
+export default async function sitemap(): Promise<MetadataRoute.Sitemap> {
+  // Drawn on request: the sheets are in the database, which a build has not got.
+  await connection();
+  const { regions, rules } = await listAddresses(makeCtx());
+  const paths = [...STILL, ...regions.map((code) => `/regions/${code}`), ...rules.map((id) => `/rules/${id}`)];
+  return paths.map((path) => ({ url: `${ownOrigin()}${path}` }));
+}

@@ -1,0 +1,95 @@
+import type { ReactElement, ReactNode } from 'react';
+import { RuleLine } from '@/components/regions/rule-card';
+import { Disclosure } from '@/components/ui/disclosure';
+import type { JudgedRule, RegionChecklist } from '@/lib/checks/domain/checklist';
+import { byTopic, sectionsOf, type SectionName } from '@/lib/checks/domain/sections';
+import { words } from '@/lib/kernel/words';
+import { ChecklistItem } from './checklist-item';
+import type { ListView } from './list-view';
+
+type Props = { readonly region: RegionChecklist; readonly view: ListView };
+
+const OPEN = ['sources-disagree', 'applies', 'treat-as-applying', 'not-settled'] as const;
+
+/** The lines for one place, in the order they are read: what applies, what to treat as applying, what is open, the rest folded. */
+export function ChecklistSections({ region, view }: Props): ReactElement {
+  const sections = sectionsOf(region.rules);
+  const show = (rules: readonly JudgedRule[]) => <ByTopic rules={rules} view={view} />;
+  return (
+    <>
+      {OPEN.filter((name) => name === 'applies' || sections[name].length > 0).map((name) => (
+        <Section key={name} name={name} view={view}>
+          {name === 'applies' ? null : <p>{words(`checks.result.sectionTexts.${name}`)}</p>}
+          {sections[name].length === 0 ? <p>{words('checks.result.empty')}</p> : show(sections[name])}
+        </Section>
+      ))}
+      <Section name="notes" view={view}>
+        <Folded count={sections.notes.length} summary="notesThat" rules={sections.notes} view={view} />
+        <Folded count={sections['open-notes'].length} summary="notesOpen" rules={sections['open-notes']} view={view} />
+      </Section>
+      {sections.said.length === 0 ? null : (
+        <Section name="said" view={view}>
+          <p>{words('checks.result.sectionTexts.said')}</p>
+          {show(sections.said)}
+        </Section>
+      )}
+      <Section name="does-not-apply" view={view}>
+        <Folded count={sections['does-not-apply'].length} summary="doesNot" rules={sections['does-not-apply']} view={view} full />
+      </Section>
+    </>
+  );
+}
+
+function ByTopic({ rules, view }: { readonly rules: readonly JudgedRule[]; readonly view: ListView }): ReactElement {
+  return (
+    <>
+      {byTopic(rules).map((group) => (
+        <div key={group.topic} className="mt-6">
+          <h3 className="font-sans text-plain font-strong text-umber">{words(`checks.topicNames.${group.topic}`)}</h3>
+          {group.rules.map((judged) => (
+            <ChecklistItem key={judged.id} judged={judged} view={view} />
+          ))}
+        </div>
+      ))}
+    </>
+  );
+}
+
+type SectionProps = { readonly name: Exclude<SectionName, 'open-notes'>; readonly view: ListView; readonly children: ReactNode };
+
+function Section({ name, view, children }: SectionProps): ReactElement {
+  const id = `${view.code}-${name}`;
+  return (
+    <section className="mt-8" aria-labelledby={id}>
+      <h2 id={id}>{words(`checks.result.sections.${name}`)}</h2>
+      {children}
+    </section>
+  );
+}
+
+type FoldedProps = {
+  readonly count: number;
+  readonly summary: 'notesThat' | 'notesOpen' | 'doesNot';
+  readonly rules: readonly JudgedRule[];
+  readonly view: ListView;
+  readonly full?: true;
+};
+
+/** Counted and folded; printed open. Lines that do not apply say why, notes only what they say. */
+function Folded({ count, summary, rules, view, full }: FoldedProps): ReactElement | null {
+  if (count === 0) return null;
+  return (
+    <Disclosure summary={words(`checks.result.folded.${summary}`, { count })}>
+      {full === true ? (
+        <ByTopic rules={rules} view={view} />
+      ) : (
+        <ul>
+          {rules.flatMap(({ id }) => {
+            const rule = view.told.get(id);
+            return rule === undefined ? [] : [<RuleLine key={id} rule={rule} numberOf={view.numberOf} />];
+          })}
+        </ul>
+      )}
+    </Disclosure>
+  );
+}

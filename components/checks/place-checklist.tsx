@@ -1,0 +1,100 @@
+import type { ReactElement } from 'react';
+import { DefinitionList } from '@/components/ui/definition-list';
+import type { RegionChecklist } from '@/lib/checks/domain/checklist';
+import { sectionsOf } from '@/lib/checks/domain/sections';
+import { sayDate } from '@/lib/kernel/say';
+import { words } from '@/lib/kernel/words';
+import { ChecklistSections } from './checklist-sections';
+import type { ListView } from './list-view';
+import { WhomToAsk } from './whom-to-ask';
+
+type Props = { readonly region: RegionChecklist; readonly view: ListView };
+
+/** The whole checklist for one place. */
+export function PlaceChecklist({ region, view }: Props): ReactElement {
+  return (
+    <>
+      <Counts region={region} />
+      <ChecklistSections region={region} view={view} />
+      <Coming region={region} />
+      <Classes region={region} view={view} />
+      <NotInherited region={region} />
+      <WhomToAsk {...region} placeNames={view.placeNames} />
+    </>
+  );
+}
+
+/** How many lines stand in each part, each count a way to it. */
+function Counts({ region }: Pick<Props, 'region'>): ReactElement {
+  const sections = sectionsOf(region.rules);
+  const parts = (['sources-disagree', 'applies', 'treat-as-applying', 'not-settled', 'does-not-apply', 'said'] as const).filter(
+    (name) => sections[name].length > 0,
+  );
+  return (
+    <nav className="no-print mt-8" aria-label={words('checks.result.jump')}>
+      <ul className="flex flex-wrap gap-x-6 gap-y-2 font-sans text-plain">
+        {parts.map((name) => (
+          <li key={name}>
+            <a href={`#${region.code}-${name}`}>{words(`checks.result.sections.${name}`)}</a> ({sections[name].length})
+          </li>
+        ))}
+        <li>
+          <a href={`#${region.code}-ask`}>{words('checks.result.sections.ask')}</a>
+        </li>
+      </ul>
+    </nav>
+  );
+}
+
+function Coming({ region: { coming, code } }: Pick<Props, 'region'>): ReactElement | null {
+  if (coming.length === 0) return null;
+  const id = `${code}-coming`;
+  return (
+    <section className="mt-8" aria-labelledby={id}>
+      <h2 id={id}>{words('checks.result.sections.coming')}</h2>
+      <ul>
+        {coming.map(({ id: rule, title, from }) => (
+          <li key={rule} className="py-1">
+            {words('checks.result.sectionTexts.coming', { date: sayDate(from) })} <a href={`/rules/${rule}`}>{title}</a>
+          </li>
+        ))}
+      </ul>
+    </section>
+  );
+}
+
+function Classes({ region: { categories, code }, view }: Props): ReactElement | null {
+  const possible = categories.filter((category) => category.possible);
+  if (possible.length === 0) return null;
+  const id = `${code}-categories`;
+  return (
+    <section className="mt-8" aria-labelledby={id}>
+      <h2 id={id}>{words('checks.result.sections.categories')}</h2>
+      <p>{words('checks.result.sectionTexts.categories')}</p>
+      <DefinitionList
+        entries={possible.map(({ term, name, region }) => ({
+          id: term,
+          name: <a href={`/regions/${region}#term-${term}`}>{name}</a>,
+          value: `${view.placeNames.get(region) ?? region}, ${words('checks.result.possible')}`,
+        }))}
+      />
+    </section>
+  );
+}
+
+function NotInherited({ region: { notInherited, code } }: Pick<Props, 'region'>): ReactElement | null {
+  if (notInherited.length === 0) return null;
+  const id = `${code}-not-inherited`;
+  return (
+    <section className="mt-8" aria-labelledby={id}>
+      <h2 id={id}>{words('checks.result.notInherited')}</h2>
+      <ul className="list-disc ps-6">
+        {notInherited.map(({ rule, why }) => (
+          <li key={rule}>
+            <a href={`/rules/${rule}`}>{rule}</a>: {why}
+          </li>
+        ))}
+      </ul>
+    </section>
+  );
+}

@@ -1,0 +1,69 @@
+import type { ReactElement } from 'react';
+import { CheckboxGroup } from '@/components/ui/checkbox-group';
+import { ErrorSummary } from '@/components/ui/error-summary';
+import { Field } from '@/components/ui/field';
+import { controlProps } from '@/components/ui/field';
+import { PageHeading } from '@/components/ui/page-heading';
+import { SubmitButton } from '@/components/ui/submit-button';
+import { words } from '@/lib/kernel/words';
+
+export type Place = { readonly code: string; readonly name: string; readonly line: readonly string[] };
+
+type Props = {
+  readonly address: string;
+  readonly places: readonly Place[];
+  readonly chosen: readonly string[];
+  readonly saleOn: string;
+  /** Why the form came back: no place, a bad day, or a place without a sheet. */
+  readonly why: string | null;
+  readonly submit: string;
+  readonly act: (form: FormData) => Promise<void>;
+  readonly names: ReadonlyMap<string, string>;
+};
+
+/** What to mend, with the field it belongs to. */
+function faultOf(why: string | null, first: string): { readonly id: string; readonly said: string } | null {
+  if (why === null) return null;
+  if (why === 'day') return { id: 'on', said: words('checks.places.badDay') };
+  if (why.startsWith('unknown:')) return { id: first, said: words('checks.places.unknown', { code: why.slice('unknown:'.length) }) };
+  return { id: first, said: words('checks.places.missing') };
+}
+
+/** Where a piece is sold and when: the first page of a check, and the page to change it. */
+export function PlacesForm(props: Props): ReactElement {
+  const { address, places, chosen, saleOn, submit, act, names } = props;
+  const fault = faultOf(props.why, 'region');
+  const day = {
+    label: words('checks.places.day'),
+    hint: words('checks.places.dayHint'),
+    error: fault?.id === 'on' ? fault.said : undefined,
+  };
+  const above = (line: readonly string[]) => line.slice(0, -1).map((code) => names.get(code) ?? code);
+  return (
+    <form action={act} noValidate className="flex flex-col gap-6">
+      {fault === null ? null : <ErrorSummary heading={words('checks.faults.heading', { count: 1 })} faults={[fault]} tries={1} />}
+      <PageHeading>{words('checks.places.title')}</PageHeading>
+      <p>{words('checks.places.why')}</p>
+      <input type="hidden" name="key" value={address} />
+      <CheckboxGroup
+        id="region"
+        name="region"
+        legend={words('checks.places.legend')}
+        hint={words('checks.places.hint')}
+        error={fault?.id === 'region' ? fault.said : undefined}
+        options={places.map(({ code, name, line }) => ({ value: code, label: name, hint: above(line).join(', ') || undefined }))}
+        last={[]}
+        chosen={chosen}
+      />
+      <p className="field-hint">
+        {words('checks.places.notHere')} {words.rich('checks.places.notHereText', { link: (said) => <a href="/regions">{said}</a> })}
+      </p>
+      <Field id="on" {...day}>
+        <input type="date" className="control" name="on" defaultValue={saleOn} {...controlProps('on', day)} />
+      </Field>
+      <div>
+        <SubmitButton busy={words('checks.places.busy')}>{submit}</SubmitButton>
+      </div>
+    </form>
+  );
+}

@@ -1,0 +1,37 @@
+import { dirname } from 'node:path';
+import { fileURLToPath } from 'node:url';
+
+/** For every answer, uploads and errors too. What hangs on settings read at start is set in proxy.ts. */
+const everywhere = [
+  { key: 'content-security-policy', value: "default-src 'none'; frame-ancestors 'none'" },
+  // `no-referrer` would make browsers post forms with `Origin: null`, and those are refused.
+  { key: 'referrer-policy', value: 'same-origin' },
+  { key: 'x-content-type-options', value: 'nosniff' },
+  { key: 'cross-origin-opener-policy', value: 'same-origin' },
+  {
+    key: 'permissions-policy',
+    value:
+      'accelerometer=(), browsing-topics=(), camera=(), display-capture=(), geolocation=(), gyroscope=(), magnetometer=(), microphone=(), midi=(), payment=(), usb=()',
+  },
+];
+
+/** Behind a front server that ended TLS: only there does a promise of https make sense. */
+const overHttps = [{ key: 'strict-transport-security', value: 'max-age=63072000; includeSubDomains' }];
+
+/** @type {import('next').NextConfig} */
+const config = {
+  distDir: process.env.FOOTRING_DIST ?? '.next',
+  poweredByHeader: false,
+  reactStrictMode: true,
+  serverExternalPackages: ['knex', 'mysql2'],
+  turbopack: { root: dirname(fileURLToPath(import.meta.url)) },
+  experimental: { serverActions: { bodySizeLimit: '2mb' } },
+  async headers() {
+    return [
+      { source: '/:path*', headers: everywhere },
+      { source: '/:path*', has: [{ type: 'header', key: 'x-forwarded-proto', value: 'https' }], headers: overHttps },
+    ];
+  },
+};
+
+export default config;

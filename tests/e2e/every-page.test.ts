@@ -1,0 +1,141 @@
+import AxeBuilder from '@axe-core/playwright';
+import type { Browser, Page } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { checkBriefly, MUG, openBrowser, SITE, visit } from './browser';
+
+let browser: Browser;
+let pages: readonly string[] = [];
+
+/** Every kind of page there is, with a check and a copy that exist. */
+async function routes(): Promise<readonly string[]> {
+  const page = await (await visit(browser)).newPage();
+  await checkBriefly(page, ['dk', 'us-ca'], MUG);
+  await page.getByRole('button', { name: 'Show my checklist' }).click();
+  await page.waitForURL(/\/check\/[A-Za-z0-9_-]{22}$/);
+  const check = new URL(page.url()).pathname;
+  await page.getByRole('button', { name: 'Keep a dated copy' }).click();
+  await page.waitForURL(/\/copies\//);
+  const copy = new URL(page.url()).pathname;
+  await page.goto(`${check}/depth-mm`);
+  await page.locator('input[name="depth-mm"]').fill('deep');
+  await page.getByRole('button', { name: 'Carry on' }).click();
+  await page.waitForURL(/look=1/);
+  await page.context().close();
+  return [
+    '/',
+    '/regions',
+    '/regions?q=zzzz',
+    '/regions/dk',
+    '/regions/us-ca',
+    '/regions/care',
+    '/regions/eu/on/2020-01-01',
+    '/rules/dk-register',
+    '/rules/eu-pb-cat2',
+    '/rules/ca-nonfood-warning',
+    '/check',
+    '/check?why=none',
+    `${check}/use`,
+    `${check}/form`,
+    `${check}/contact`,
+    `${check}/depth-mm?look=1`,
+    `${check}/turnover-a-year`,
+    `${check}/seller-region`,
+    `${check}/places`,
+    `${check}/review`,
+    check,
+    `${check}?place=dk`,
+    `${check}?place=us-ca`,
+    copy,
+    '/privacy',
+    '/cautions',
+    '/accessibility',
+    '/contact',
+    '/regions/dk/editions',
+    '/regions/jp/editions/1',
+    '/problems/not-understood',
+    '/broken',
+    '/nope',
+  ];
+}
+
+beforeAll(async () => {
+  browser = await openBrowser();
+  pages = await routes();
+});
+afterAll(async () => {
+  await browser.close();
+});
+
+const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
+
+async function widerThanScreen(page: Page): Promise<number> {
+  return page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+}
+
+describe.each([
+  [320, false],
+  [320, true],
+  [1280, false],
+  [1280, true],
+])('W1 at %i px, dark: %s', (width, dark) => {
+  test('axe finds nothing on any page, and no page scrolls sideways', async () => {
+    const page = await (await visit(browser, { width, dark })).newPage();
+    const faults: unknown[] = [];
+    for (const path of pages) {
+      await page.goto(path);
+      const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
+      faults.push(...violations.map(({ id, nodes }) => ({ path, id, at: nodes.slice(0, 3).map(({ target }) => target.join(' ')) })));
+      const wider = await widerThanScreen(page);
+      if (wider > 0) faults.push({ path, wider });
+    }
+    expect(faults).toEqual([]);
+  }, 400_000);
+});
+
+test('S09 every page carries a fresh nonce, runs no foreign script, and no policy is broken', async () => {
+  const page = await (await visit(browser)).newPage();
+  const broken: string[] = [];
+  page.on('console', (message) => {
+    if (/Content Security Policy/i.test(message.text())) broken.push(message.text());
+  });
+  const nonces = new Set<string>();
+  for (const path of pages) {
+    const answer = await page.goto(path);
+    const policy = answer?.headers()['content-security-policy'] ?? '';
+    nonces.add(/'nonce-([^']+)'/.exec(policy)?.[1] ?? `none on ${path}`);
+    expect([path, /unsafe-eval|script-src[^;]*unsafe-inline/.test(policy)]).toEqual([path, false]);
+  }
+  expect(broken).toEqual([]);
+  expect(nonces.size).toBe(pages.length);
+});
+
+test('S08 every answer says how it may be used, also errors and the API', async () => {
+  for (const path of ['/', '/nope', '/regions/zz', '/api/health', '/api/v1/regions', '/api/v1/rules/none', '/robots.txt', '/icon.svg']) {
+    const { headers } = await fetch(SITE + path);
+    expect([path, headers.get('x-content-type-options'), headers.get('referrer-policy')]).toEqual([path, 'nosniff', 'same-origin']);
+    expect([path, headers.get('x-powered-by')]).toEqual([path, null]);
+    expect(headers.get('content-security-policy')).toMatch(/frame-ancestors 'none'/);
+  }
+});
+
+test('S04 a form that another site sends is refused and changes nothing', async () => {
+  const page = await (await visit(browser)).newPage();
+  await page.goto('/check');
+  const action = await page
+    .locator('form:has(input[name="region"]) input[type="hidden"]')
+    .evaluateAll((inputs) => inputs.map((input) => [(input as HTMLInputElement).name, (input as HTMLInputElement).value] as const));
+  for (const origin of ['https://evil.example.test', 'null', undefined]) {
+    const form = new FormData();
+    for (const [name, value] of action) form.append(name, value);
+    form.append('region', 'dk');
+    const answer = await fetch(`${SITE}/check`, {
+      method: 'POST',
+      body: form,
+      redirect: 'manual',
+      headers: origin === undefined ? {} : { origin },
+    });
+    expect([origin, answer.status]).toEqual([origin, 403]);
+  }
+  const key = action.find(([name]) => name === 'key')?.[1] ?? '';
+  expect((await fetch(`${SITE}/check/${key}/review`)).status).toBe(404);
+});
