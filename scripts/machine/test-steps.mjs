@@ -1,0 +1,146 @@
+import { existsSync, mkdirSync, readFileSync, readdirSync } from 'node:fs';
+import path from 'node:path';
+import { end, must, run } from './processes.mjs';
+import { Trouble } from './say.mjs';
+import { dataFolder, freePort, root } from './settings.mjs';
+import { build, isBuilt, startSite, untilHealthy } from './site.mjs';
+import { startTestDatabase, testFolder } from './test-database.mjs';
+
+const DIST = '.next-test';
+/** The build of the tests is thrown away; its key protects nothing, and being always the same it lets a build be used again. */
+const KEY = Buffer.from('footring tests, not a secret one').toString('base64');
+const made = { dist: DIST, record: path.join(dataFolder, 'built-test'), key: KEY };
+const node = (...args) => run(process.execPath, args, { env: cleanEnv() });
+const tool = (file, ...args) => node(path.join('node_modules', file), ...args);
+
+/** Kept byte for byte, since hashes are made of it; written for people in lines of their own length; rewritten by Next. As in `npm run format`. */
+const UNFORMATTED = ['!tests/fixtures/**', '!content/seed/**', '!**/*.md', '!tsconfig.json'];
+
+/** Every step in its order: what it is called, and what it does. A house step gives its exit code, a suite counts its tests. */
+export const STEPS = [
+  { name: 'format', work: () => house(tool('prettier/bin/prettier.cjs', '--check', '.', ...UNFORMATTED)) },
+  { name: 'lint', work: () => house(tool('eslint/bin/eslint.js', '-c', '.ci/eslint.config.mjs', '--max-warnings', '0', '.')) },
+  {
+    name: 'rules',
+    work: () => house(tool('dependency-cruiser/bin/dependency-cruise.mjs', '--config', '.ci/dependency-rules.cjs', ...sources())),
+  },
+  { name: 'types', work: () => house(tool('typescript/bin/tsc', '--noEmit', '-p', '.ci/tsconfig.node.json')) },
+  { name: 'invariants', work: () => house(node('scripts/check-invariants.mjs')) },
+  { name: 'unit', work: () => suite('unit') },
+  { name: 'properties', work: () => suite('properties') },
+  { name: 'cases', work: () => suite('cases') },
+  { name: 'db', needs: ['database'], work: () => onDatabase((server) => suite('db', serverEnv(server))) },
+  { name: 'build', work: () => house(buildSite()) },
+  { name: 'e2e', needs: ['database', 'browser'], work: () => onDatabase(journeys) },
+];
+
+/** What the tools below lean on and a fresh checkout lacks: the types Next makes of the folders in app/. */
+export async function prepare() {
+  const log = path.join(dataFolder, 'typegen.log');
+  await must('The types of the pages could not be made.', process.execPath, ['node_modules/next/dist/bin/next', 'typegen'], {
+    log,
+    env: cleanEnv(),
+  });
+}
+
+let server;
+async function onDatabase(work) {
+  server ??= await startTestDatabase();
+  return work(server);
+}
+
+async function journeys(database) {
+  if ((await buildSite()) !== 0) return { passed: 0, failed: 1 };
+  const port = await freePort();
+  const site = `http://localhost:${port}`;
+  const env = {
+    ...cleanEnv(),
+    DATABASE_URL: database.appUrl('footring'),
+    DATABASE_OWNER_URL: database.ownerUrl('footring'),
+    FOOTRING_SITE: site,
+  };
+  await must('The tables could not be made.', process.execPath, ['--import', 'tsx', 'scripts/migrate.ts', '--seed'], {
+    log: path.join(dataFolder, 'migrate-test.log'),
+    env: { ...env, TSX_TSCONFIG_PATH: '.ci/tsconfig.node.json' },
+  });
+  const output = process.stdout.fd;
+  const running = startSite({
+    ...made,
+    port,
+    host: null,
+    site,
+    databaseUrl: env.DATABASE_URL,
+    output,
+    onDeath: (message) => process.stderr.write(`${message}\n`),
+  });
+  try {
+    await untilHealthy(site);
+    return await suite('e2e', env);
+  } finally {
+    await end(running);
+  }
+}
+
+async function buildSite() {
+  if (isBuilt(made)) {
+    process.stdout.write('These sources are built already.\n');
+    return 0;
+  }
+  try {
+    await build({ ...made, env: cleanEnv() });
+    return 0;
+  } catch (error) {
+    if (!(error instanceof Trouble)) throw error;
+    process.stdout.write(`${error.message}\n`);
+    return 1;
+  }
+}
+
+async function house(code) {
+  return (await code) === 0 ? { passed: 1, failed: 0 } : { passed: 0, failed: 1 };
+}
+
+/** Runs one kind of tests and counts them from what vitest writes down. A run that dies or fails outside a test counts as one failure. */
+async function suite(project, env = {}) {
+  const folder = testFolder();
+  const report = path.join(folder, `${project}.json`);
+  mkdirSync(folder, { recursive: true });
+  const args = [
+    'run',
+    '-c',
+    '.ci/vitest.config.ts',
+    '--project',
+    project,
+    '--reporter=default',
+    '--reporter=json',
+    `--outputFile.json=${report}`,
+  ];
+  const code = await run(process.execPath, ['node_modules/vitest/vitest.mjs', ...args], { env: { ...cleanEnv(), ...env } });
+  const { numPassedTests: passed, numFailedTests: failed } = existsSync(report)
+    ? JSON.parse(readFileSync(report, 'utf8'))
+    : { numPassedTests: 0, numFailedTests: 0 };
+  return { passed, failed: code === 0 ? failed : Math.max(failed, 1) };
+}
+
+const serverEnv = (database) => ({
+  FOOTRING_TEST_OWNER_URL: database.ownerUrl('footring'),
+  FOOTRING_TEST_APP_URL: database.appUrl('footring'),
+});
+
+// Settings of a site that runs beside must not reach the tests.
+function cleanEnv() {
+  return {
+    NODE_ENV: '',
+    DATABASE_URL: '',
+    DATABASE_OWNER_URL: '',
+    FOOTRING_SITE: '',
+    PORT: '',
+    FOOTRING_DIST: DIST,
+    NEXT_TELEMETRY_DISABLED: '1',
+  };
+}
+
+function sources() {
+  const folders = ['app', 'components', 'content', 'db', 'lib', 'tests', 'scripts'].filter((name) => existsSync(path.join(root, name)));
+  return [...folders, ...readdirSync(root).filter((name) => /\.(ts|mjs)$/.test(name) && name !== 'next-env.d.ts')];
+}

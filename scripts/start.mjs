@@ -1,0 +1,82 @@
+import path from 'node:path';
+import { startDatabase } from './machine/database-server.mjs';
+import { checkRoom, ensurePackages, roomNeeded } from './machine/packages.mjs';
+import { must, stop, stopOnSignals } from './machine/processes.mjs';
+import { MARIADB, ensurePrograms } from './machine/programs.mjs';
+import { during, say, tell } from './machine/say.mjs';
+import * as settings from './machine/settings.mjs';
+import { build, isBuilt, pagesThere, startSite, untilHealthy } from './machine/site.mjs';
+
+const TO_TRY = [
+  ['/check', 'check a piece: choose regions, answer what matters, get the list'],
+  ['/regions', 'region sheets: what each place asks, with its sources'],
+  ['/compare', 'limits of several regions side by side'],
+  ['/notes', 'studio notes'],
+  ['/api/v1/regions', 'the same as data'],
+];
+const { dataFolder } = settings;
+
+/** From a bare machine to the running site; each step is skipped when an earlier start has done it. */
+async function start() {
+  settings.checkNode();
+  settings.readEnvFile();
+  const wanted = settings.readSettings();
+  await settings.holdAlone('start', `${wanted.site}, process ${process.pid}`);
+  await settings.checkPort(wanted);
+  settings.makeDataFolder();
+  checkRoom(dataFolder, roomNeeded());
+  const secrets = settings.readSecrets();
+  const key = process.env.NEXT_SERVER_ACTIONS_ENCRYPTION_KEY || secrets.serverActionsKey;
+
+  if (wanted.databaseUrl === null) await ensurePrograms([MARIADB]);
+  await ensurePackages();
+  const { databaseUrl, ownerUrl } = wanted.databaseUrl === null ? await localDatabase(secrets) : wanted;
+  const env = { DATABASE_URL: databaseUrl, FOOTRING_SITE: wanted.site, PORT: String(wanted.port) };
+  if (ownerUrl === null) say('DATABASE_OWNER_URL is not set: the tables stay as they are.');
+  else await during('Bringing the tables up to date', () => migrate({ ...env, DATABASE_OWNER_URL: ownerUrl }));
+
+  const made = { dist: '.next', record: path.join(dataFolder, 'built'), key };
+  if (!isBuilt(made)) await during('Building the site', () => build({ ...made, env: { ...env, DATABASE_OWNER_URL: '' } }));
+  startSite({ ...made, ...wanted, databaseUrl, onDeath: giveUp });
+  const local = `http://${wanted.host ?? 'localhost'}:${wanted.port}`;
+  await untilHealthy(local);
+  await welcome(wanted.site, local);
+}
+
+async function localDatabase(secrets) {
+  const server = await during('Starting the database', () =>
+    startDatabase({ folder: path.join(dataFolder, 'database'), secrets, onDeath: giveUp }),
+  );
+  return { databaseUrl: server.appUrl('footring'), ownerUrl: server.ownerUrl('footring') };
+}
+
+async function migrate(env) {
+  const args = ['--import', 'tsx', 'scripts/migrate.ts', '--seed'];
+  await must('The tables could not be brought up to date.', process.execPath, args, {
+    log: path.join(dataFolder, 'migrate.log'),
+    env: { ...env, TSX_TSCONFIG_PATH: '.ci/tsconfig.node.json' },
+  });
+}
+
+async function welcome(site, local) {
+  const pages = await pagesThere(local, TO_TRY);
+  say(`\nFootring is at ${site}`);
+  if (pages.length > 0) say('\nTo try:');
+  for (const [place, words] of pages) say(`  ${site}${place}  ${words}`);
+  say('\nCtrl-C stops it.');
+}
+
+function giveUp(message) {
+  tell(message);
+  void stop(1);
+}
+
+process.chdir(settings.root);
+process.umask(0o022);
+stopOnSignals();
+try {
+  await start();
+} catch (error) {
+  tell(error);
+  await stop(1);
+}
