@@ -2,9 +2,12 @@ import { createTranslator } from 'use-intl/core';
 import broken from '@/content/messages/en/broken.json';
 import checks from '@/content/messages/en/checks.json';
 import home from '@/content/messages/en/home.json';
+import measures from '@/content/messages/en/measures.json';
 import pieces from '@/content/messages/en/pieces.json';
 import problems from '@/content/messages/en/problems.json';
 import questions from '@/content/messages/en/questions.json';
+import readings from '@/content/messages/en/readings.json';
+import readingsPage from '@/content/messages/en/readings-page.json';
 import regions from '@/content/messages/en/regions.json';
 import site from '@/content/messages/en/site.json';
 
@@ -12,7 +15,19 @@ import site from '@/content/messages/en/site.json';
 export const LOCALE = 'en-GB';
 
 /** Every message of the interface, by file name. A file that is added joins here. */
-export const MESSAGES = { broken, checks, home, pieces, problems, questions, regions, site };
+export const MESSAGES = {
+  broken,
+  checks,
+  home,
+  measures,
+  pieces,
+  problems,
+  questions,
+  readings,
+  'readings-page': readingsPage,
+  regions,
+  site,
+};
 
 /** `words('home.title')`. A key that does not exist is no valid program; a message that cannot be formatted throws. */
 export const words = createTranslator({
