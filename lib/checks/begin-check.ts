@@ -6,7 +6,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { Ctx } from '@/lib/server/ctx';
 import { keptSince } from './check-age';
 import type { CheckId } from './domain/ids';
-import { loadLines } from './load-lines';
+import { loadLines } from '@/lib/server/load-lines';
 import type { BeginInput } from './schema';
 
 export type BeginRefusal = { readonly kind: 'no-region' } | { readonly kind: 'unknown-region'; readonly code: string };

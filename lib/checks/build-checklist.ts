@@ -12,7 +12,7 @@ import type { Place } from './domain/line';
 import { nextOver, type NextQuestion } from './domain/next-over';
 import { QUESTIONS } from './domain/questions';
 import { keepCopy } from './keep-copy';
-import { loadLines, type UnknownRegion } from './load-lines';
+import { loadLines, type UnknownRegion } from '@/lib/server/load-lines';
 
 export type ChecklistInput = {
   readonly regions: readonly string[];

@@ -7,7 +7,7 @@ import type { Ctx } from '@/lib/server/ctx';
 import type { BeginRefusal } from './begin-check';
 import { keptSince } from './check-age';
 import type { CheckId } from './domain/ids';
-import { loadLines } from './load-lines';
+import { loadLines } from '@/lib/server/load-lines';
 import type { BeginInput } from './schema';
 
 /** Changes the places of sale and the day of a check; every answer stays. */

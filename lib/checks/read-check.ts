@@ -9,7 +9,7 @@ import { keptSince, keptUntil } from './check-age';
 import type { LoadedLine } from './domain/checklist';
 import type { CheckId } from './domain/ids';
 import { nextOver, type NextQuestion } from './domain/next-over';
-import { loadLines } from './load-lines';
+import { loadLines } from '@/lib/server/load-lines';
 
 /** A check with the sheets it is read from and what is still to ask. */
 export type OpenCheck = {

@@ -10,7 +10,7 @@ import { changesBetween, type StatusChange } from './domain/status-change';
 import { SEMANTICS, type DatedCopy } from './domain/dated-copy';
 import type { LoadedLine } from './domain/checklist';
 import type { CopyHash } from './domain/ids';
-import { loadLine, loadLines } from './load-lines';
+import { loadLine, loadLines } from '@/lib/server/load-lines';
 import { openQuestionsOf, type OpenQuestions } from './read-result';
 import { copyDocument } from './schema';
 

@@ -5,11 +5,11 @@ import type { Edition, EditionHead } from '@/db/rows/edition-row';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import { regionLine, type RegionLine } from '@/lib/regions/domain/line';
-import type { Ctx } from '@/lib/server/ctx';
-import { readEdition } from '@/lib/server/sheets';
-import type { LoadedLine } from './domain/checklist';
-import { compileLine, type CompiledLine, type Place } from './domain/line';
-import { QUESTIONS } from './domain/questions';
+import type { Ctx } from './ctx';
+import { readEdition } from './sheets';
+import type { LoadedLine } from '@/lib/checks/domain/checklist';
+import { compileLine, type CompiledLine, type Place } from '@/lib/checks/domain/line';
+import { QUESTIONS } from '@/lib/checks/domain/questions';
 
 const BASE = 'care';
 
