@@ -4,7 +4,18 @@ import { listAddresses } from '@/lib/regions/list-addresses';
 import { makeCtx } from '@/lib/server/ctx';
 import { ownOrigin } from '@/lib/server/own-site';
 
-const STILL = ['/', '/check', '/regions', '/privacy', '/cautions', '/accessibility', '/contact'];
+const STILL = [
+  '/',
+  '/check',
+  '/regions',
+  '/readings',
+  '/substances/pb',
+  '/substances/cd',
+  '/privacy',
+  '/cautions',
+  '/accessibility',
+  '/contact',
+];
 
 export default async function sitemap(): Promise<MetadataRoute.Sitemap> {
   // Drawn on request: the sheets are in the database, which a build has not got.

@@ -33,7 +33,7 @@ export function LimitsTable({ rows, place, names }: Props): ReactElement {
         id: row.rule.id,
         cells: {
           rule: <RuleCell row={row} own={place.code} names={names} />,
-          substance: saySubstance(row.limit.substance),
+          substance: <a href={`/substances/${row.limit.substance.toLowerCase()}`}>{saySubstance(row.limit.substance)}</a>,
           category: <Categories row={row} />,
           figure: <Figure row={row} />,
           decision: <DecisionCell row={row} />,

@@ -20,6 +20,9 @@ export function SiteHeader({ path }: { readonly path: string }): ReactElement {
             <MenuLink href="/regions" path={path}>
               {words('site.menu.regions')}
             </MenuLink>
+            <MenuLink href="/readings" path={path}>
+              {words('site.menu.readings')}
+            </MenuLink>
             <MenuLink href="/contact" path={path}>
               {words('site.menu.help')}
             </MenuLink>

@@ -88,8 +88,8 @@ export function stopOnSignals() {
         for (const started of running) signal(started, 'SIGKILL');
         process.exit(code);
       }
+      if (asked === 0) say('\nStopping.');
       asked ||= Date.now();
-      say('\nStopping.');
       void stop(code);
     });
   }

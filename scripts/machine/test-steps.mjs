@@ -31,6 +31,13 @@ export const STEPS = [
   { name: 'cases', work: () => suite('cases') },
   { name: 'db', needs: ['database'], work: () => onDatabase((server) => suite('db', serverEnv(server))) },
   { name: 'build', work: () => house(buildSite()) },
+  {
+    name: 'budgets',
+    work: async () =>
+      (await buildSite()) === 0
+        ? house(run(process.execPath, ['.ci/budgets.mjs'], { env: { ...cleanEnv(), FOOTRING_DIST: DIST } }))
+        : { passed: 0, failed: 1 },
+  },
   { name: 'e2e', needs: ['database', 'browser'], work: () => onDatabase(journeys) },
 ];
 

@@ -6,6 +6,17 @@ import { checkBriefly, MUG, openBrowser, SITE, visit } from './browser';
 let browser: Browser;
 let pages: readonly string[] = [];
 
+/** Figures of one mug held against two places, kept at an address. */
+async function readingsOf(page: Page): Promise<string> {
+  await page.goto('/readings');
+  for (const place of ['eu', 'jp']) await page.locator(`input[name="region"][value="${place}"]`).check();
+  await page.locator('select[name="use"]').selectOption('food');
+  await page.locator('[name="readings.value.1"]').fill('0.31');
+  await page.getByRole('button', { name: 'Hold against the limits', exact: true }).first().click();
+  await page.waitForURL(/\/readings\/[A-Za-z0-9_-]{22}/);
+  return new URL(page.url()).pathname;
+}
+
 /** Every kind of page there is, with a check and a copy that exist. */
 async function routes(): Promise<readonly string[]> {
   const page = await (await visit(browser)).newPage();
@@ -20,6 +31,7 @@ async function routes(): Promise<readonly string[]> {
   await page.locator('input[name="depth-mm"]').fill('deep');
   await page.getByRole('button', { name: 'Carry on' }).click();
   await page.waitForURL(/look=1/);
+  const readings = await readingsOf(page);
   await page.context().close();
   return [
     '/',
@@ -40,6 +52,9 @@ async function routes(): Promise<readonly string[]> {
     check,
     `${check}?place=dk`,
     copy,
+    '/readings',
+    readings,
+    '/substances/pb',
     '/privacy',
     '/cautions',
     '/accessibility',
