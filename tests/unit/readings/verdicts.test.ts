@@ -131,6 +131,19 @@ describe('READ-9 READ-10 possible limits', () => {
   });
 });
 
+test('READ-18 a lid added to its vessel has no entry of its own; any other lid has', () => {
+  const lids = (region: string, answers: object, lidOf = 'A') => {
+    const readings = [aReading({ value: 1 }), aReading({ value: 1, part: 'lid', specimen: lidOf })];
+    const { verdicts } = regionVerdicts(seedLine(region, DAY), answersOf(answers), aReport({ readings }), DAY);
+    return verdicts.filter(({ part }) => part === 'lid').map(({ substance, reason }) => `${substance} ${String(reason)}`);
+  };
+  expect(lids('eu', bowl)).toEqual([]);
+  expect(lids('dk', bowl)).toEqual([]);
+  expect(lids('eu', bowl, 'B')).toEqual(['Pb no-limit']);
+  expect(lids('eu', { use: 'decorative', 'could-hold-food': false })).toEqual(['Pb no-limit']);
+  expect(lids('us', bowl)).toEqual(['Pb no-limit']);
+});
+
 test('READ-13 the entries stand by strength, sheet, substance and part, whatever the order of the request', () => {
   const readings = ['Zn', 'Pb', 'Cd'].flatMap((substance) =>
     (['vessel', 'rim', 'content'] as const).map((part) =>
