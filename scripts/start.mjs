@@ -10,8 +10,7 @@ import { build, isBuilt, pagesThere, startSite, untilHealthy } from './machine/s
 const TO_TRY = [
   ['/check', 'check a piece: choose regions, answer what matters, get the list'],
   ['/regions', 'region sheets: what each place asks, with its sources'],
-  ['/compare', 'limits of several regions side by side'],
-  ['/notes', 'studio notes'],
+  ['/readings', 'readings: hold a lab’s figures against the limits of every place'],
   ['/api/v1/regions', 'the same as data'],
 ];
 const { dataFolder } = settings;

@@ -11,6 +11,9 @@ type Props = {
   readonly rows: readonly Row[];
 };
 
+/** More columns than fit side by side on paper. */
+const MANY = 4;
+
 /**
  * A table that becomes a list of labelled blocks under 40 rem. Its roles are written out, since browsers drop them
  * with `display: block`; the labels in the blocks are for the eye only, as the headers are still read.
@@ -18,7 +21,7 @@ type Props = {
 export function DataTable({ id, caption, columns, rows }: Props): ReactElement {
   return (
     <div className="scroll-area" role="region" aria-labelledby={`${id}-caption`} tabIndex={0}>
-      <table className="data-table" role="table" aria-labelledby={`${id}-caption`}>
+      <table className={columns.length > MANY ? 'data-table data-table-wide' : 'data-table'} role="table" aria-labelledby={`${id}-caption`}>
         <caption id={`${id}-caption`}>{caption}</caption>
         <thead role="rowgroup">
           <tr role="row">
