@@ -9,7 +9,7 @@ type Props = { readonly progress: readonly TopicProgress[]; readonly left: numbe
 export function CheckProgress({ progress, left }: Props): ReactElement {
   const states = { done: words('site.progress.done'), now: words('site.progress.now'), later: words('site.progress.later') };
   return (
-    <div className="mb-6 no-print">
+    <div className="mb-6 not-in-print">
       <ProgressRings
         label={words('site.progress.label')}
         topics={progress.map(({ topic, state }) => ({ id: topic, name: words(`checks.topics.${topic}`), state }))}

@@ -23,6 +23,7 @@ export function ChecklistItem({ judged, view }: Props): ReactElement | null {
       authority={view.authority}
       numberOf={view.numberOf}
       prefix={`${view.code}-`}
+      details="source"
     >
       <div className="mt-2 font-sans text-plain">
         <StateMark state={judged.status} />
@@ -31,6 +32,19 @@ export function ChecklistItem({ judged, view }: Props): ReactElement | null {
       <Silenced judged={judged} told={view.told} />
       <Exceptions judged={judged} told={view.told} />
     </RuleCard>
+  );
+}
+
+/** A line that does not apply, in short: what it is, and why not. Its page has the rest. */
+export function SpentLine({ judged, view }: Props): ReactElement {
+  return (
+    <li id={`${view.code}-rule-${judged.id}`} className="keep-together border-b border-rule py-3">
+      <p className="font-strong">
+        <a href={`/rules/${judged.id}`}>{judged.title}</a>
+      </p>
+      <BecauseLine because={judged.because} names={view.placeNames} />
+      <Silenced judged={judged} told={view.told} />
+    </li>
   );
 }
 

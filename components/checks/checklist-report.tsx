@@ -2,6 +2,7 @@ import type { ReactElement } from 'react';
 import { CitedList } from '@/components/regions/cited-list';
 import { LinkButton } from '@/components/ui/link-button';
 import type { LoadedLine, RegionChecklist } from '@/lib/checks/domain/checklist';
+import { sectionsOf } from '@/lib/checks/domain/sections';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import { words } from '@/lib/kernel/words';
 import { citeSources } from '@/lib/regions/domain/cited-sources';
@@ -50,12 +51,16 @@ export function ChecklistReport(report: Report): ReactElement {
   );
 }
 
+/** Parts whose lines show their sources; the lines of the others lead to their own pages. */
+const CITING = ['sources-disagree', 'applies', 'treat-as-applying', 'not-settled', 'notes', 'said'] as const;
+
 type OneProps = { readonly report: Report; readonly region: RegionChecklist; readonly line: LoadedLine; readonly index: number };
 
 function OnePlace({ report, region, line, index }: OneProps): ReactElement {
   const rules = line.layers.flatMap(({ sheet }) => sheet.rules.map((rule) => tellRule(rule, sheet.sources)));
   const told = new Map(rules.map((rule) => [rule.id, rule]));
-  const cited = citeSources(region.rules.flatMap(({ id }) => told.get(id)?.sources ?? []));
+  const sections = sectionsOf(region.rules);
+  const cited = citeSources(CITING.flatMap((part) => sections[part]).flatMap(({ id }) => told.get(id)?.sources ?? []));
   const view: ListView = {
     ...report,
     code: region.code,

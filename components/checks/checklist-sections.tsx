@@ -4,7 +4,7 @@ import { Disclosure } from '@/components/ui/disclosure';
 import type { JudgedRule, RegionChecklist } from '@/lib/checks/domain/checklist';
 import { byTopic, sectionsOf, type SectionName } from '@/lib/checks/domain/sections';
 import { words } from '@/lib/kernel/words';
-import { ChecklistItem } from './checklist-item';
+import { ChecklistItem, SpentLine } from './checklist-item';
 import type { ListView } from './list-view';
 
 type Props = { readonly region: RegionChecklist; readonly view: ListView };
@@ -34,7 +34,7 @@ export function ChecklistSections({ region, view }: Props): ReactElement {
         </Section>
       )}
       <Section name="does-not-apply" view={view}>
-        <Folded count={sections['does-not-apply'].length} summary="doesNot" rules={sections['does-not-apply']} view={view} full />
+        <Folded count={sections['does-not-apply'].length} summary="doesNot" rules={sections['does-not-apply']} view={view} />
       </Section>
     </>
   );
@@ -72,24 +72,34 @@ type FoldedProps = {
   readonly summary: 'notesThat' | 'notesOpen' | 'doesNot';
   readonly rules: readonly JudgedRule[];
   readonly view: ListView;
-  readonly full?: true;
 };
 
-/** Counted and folded; printed open. Lines that do not apply say why, notes only what they say. */
-function Folded({ count, summary, rules, view, full }: FoldedProps): ReactElement | null {
+/** Counted and folded; printed open. Lines that do not apply say why not, notes what they say. */
+function Folded({ count, summary, rules, view }: FoldedProps): ReactElement | null {
   if (count === 0) return null;
   return (
     <Disclosure summary={words(`checks.result.folded.${summary}`, { count })}>
-      {full === true ? (
-        <ByTopic rules={rules} view={view} />
-      ) : (
-        <ul>
-          {rules.flatMap(({ id }) => {
-            const rule = view.told.get(id);
-            return rule === undefined ? [] : [<RuleLine key={id} rule={rule} numberOf={view.numberOf} />];
-          })}
-        </ul>
-      )}
+      <ul>
+        {rules.map((judged) => (
+          <Short key={judged.id} part={summary} judged={judged} view={view} />
+        ))}
+      </ul>
     </Disclosure>
   );
+}
+
+type ShortProps = { readonly part: FoldedProps['summary']; readonly judged: JudgedRule; readonly view: ListView };
+
+/** A folded line: why it does not apply, what a note says, or of a note that only may matter its name. */
+function Short({ part, judged, view }: ShortProps): ReactElement | null {
+  if (part === 'doesNot') return <SpentLine judged={judged} view={view} />;
+  if (part === 'notesOpen') {
+    return (
+      <li className="py-1">
+        <a href={`/rules/${judged.id}`}>{judged.title}</a>
+      </li>
+    );
+  }
+  const rule = view.told.get(judged.id);
+  return rule === undefined ? null : <RuleLine rule={rule} numberOf={view.numberOf} />;
 }

@@ -31,7 +31,7 @@ function Counts({ region }: Pick<Props, 'region'>): ReactElement {
     (name) => sections[name].length > 0,
   );
   return (
-    <nav className="no-print mt-8" aria-label={words('checks.result.jump')}>
+    <nav className="not-in-print mt-8" aria-label={words('checks.result.jump')}>
       <ul className="flex flex-wrap gap-x-6 gap-y-2 font-sans text-plain">
         {parts.map((name) => (
           <li key={name}>

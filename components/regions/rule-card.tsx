@@ -23,12 +23,27 @@ type Props = {
   readonly numberOf?: (source: ToldSource) => number;
   /** Before the card's ids, where a page may show the same rule twice. */
   readonly prefix?: string;
+  /** How much to unfold: all there is, or in a checklist what to do it by and the source; conditions and notes stand on the rule's page. */
+  readonly details?: 'all' | 'source';
   /** What belongs between the rule and its details: its state for a piece, the answers that led to it. */
   readonly children?: ReactNode;
 };
 
+/** Topics whose details one needs at hand to act: figures, exact words, fields. */
+const DONE_BY: readonly ToldRule['topic'][] = ['limit', 'label', 'paper', 'registration'];
+
 /** A rule as a list shows it: what to do, whose word it is, and the rest one step away. Takes props alone and fetches nothing. */
-export function RuleCard({ rule, names, today, level, authority = null, numberOf, prefix = '', children }: Props): ReactElement {
+export function RuleCard({
+  rule,
+  names,
+  today,
+  level,
+  authority = null,
+  numberOf,
+  prefix = '',
+  details = 'all',
+  children,
+}: Props): ReactElement {
   const Heading = `h${level}` as const;
   return (
     <article
@@ -43,9 +58,17 @@ export function RuleCard({ rule, names, today, level, authority = null, numberOf
       <LookAgain rule={rule} today={today} authority={authority} />
       <p className="mt-2">{rule.says}</p>
       {children}
-      <Disclosure summary={words('regions.rule.more')}>
-        <RuleDetails rule={rule} names={names} numberOf={numberOf} />
-      </Disclosure>
+      {details === 'all' ? (
+        <Disclosure summary={words('regions.rule.more')}>
+          <RuleDetails rule={rule} names={names} numberOf={numberOf} />
+        </Disclosure>
+      ) : (
+        <Disclosure summary={words('regions.rule.moreSource')}>
+          {DONE_BY.includes(rule.topic) ? <PayloadDetails payload={rule.payload} /> : null}
+          <SourceDetails sources={rule.sources} numberOf={numberOf} />
+          <p className="font-sans text-plain text-umber">{sayDates(rule)}.</p>
+        </Disclosure>
+      )}
     </article>
   );
 }

@@ -23,13 +23,15 @@ export function TextNotes({ text }: { readonly text: Text }): ReactElement | nul
   return <NoteList notes={textNotes(text, true)} />;
 }
 
-/** Of one use of a source: its standing too, whether it was read, and whether a passage was kept. `printed`: addresses are written out on paper. */
+/**
+ * Of one use of a source: its standing too, whether it was read, and whether a passage was kept. `printed`: its text is told here in
+ * full, addresses written out on paper; else a numbered list on the page tells it. */
 export function CitationNotes({ source, printed }: { readonly source: ToldSource; readonly printed: boolean }): ReactElement | null {
   return (
     <NoteList
       notes={[
         { id: 'standing', said: words(`regions.source.${source.standing}`) },
-        ...textNotes(source, printed),
+        ...textNotes(printed ? source : { seenOn: source.seenOn }, printed),
         ...(source.evidence === 'memory' ? [{ id: 'memory', said: words('regions.source.memory') }] : []),
         ...(source.passage === undefined ? [{ id: 'passage', said: words('regions.source.noPassage') }] : []),
       ]}

@@ -66,7 +66,7 @@ export default async function ResultPage({ params, searchParams }: Props): Promi
 
 function Acts({ read: { open, checklist }, here }: { readonly read: ReadResult; readonly here: string }): ReactElement {
   return (
-    <div className="no-print mt-6 flex flex-col items-start gap-4">
+    <div className="not-in-print mt-6 flex flex-col items-start gap-4">
       {checklist.next === null ? null : <LinkButton href={`${here}/${checklist.next.question}`}>{words('checks.review.goOn')}</LinkButton>}
       <LinkButton kind="plain" href={`${here}/review`}>
         {words('checks.result.mend')}
