@@ -29,8 +29,8 @@ describe.each([
     const limit = page.locator('#dk-rule-eu-pb-cat2');
     expect(await limit.innerText()).toMatch(/Applies/);
     expect(await limit.innerText()).toMatch(/Because you said: .*Inside depth: 95/s);
-    await limit.getByText('More', { exact: false }).first().click();
-    expect(await limit.innerHTML()).toMatch(/Art\. 2\(4\)/);
+    await limit.getByText('Details and source').click();
+    expect(await limit.getByText('Art. 2(4)').first().isVisible()).toBe(true);
     expect(await page.locator('#dk-rule-dk-register').innerText()).toMatch(/Applies/);
     const said = await page.locator('section', { has: page.getByRole('heading', { name: 'Also said' }) }).innerText();
     expect(said).toMatch(/1,?000/);

@@ -41,7 +41,11 @@ export default async function ResultPage({ params, searchParams }: Props): Promi
       <div className="columns">
         <div className="main-part">
           <PageHeading takesFocus>{words('checks.result.titleOf', { places })}</PageHeading>
-          <ReportBanner regions={checklist.regions} on={on} placeNames={names} />
+          <ReportBanner
+            regions={checklist.regions.filter(({ code }) => shown === undefined || code === shown)}
+            on={on}
+            placeNames={names}
+          />
           <ChangesPanel changes={changes} />
         </div>
         <div className="side-part mt-8 lg:mt-0">
