@@ -7,6 +7,7 @@ import { BecauseLine } from './because-line';
 import type { ListView } from './list-view';
 import { questionWords } from './question-words';
 import { StateMark } from './state-mark';
+import { WhyDetails } from './why-details';
 
 type Props = { readonly judged: JudgedRule; readonly view: ListView };
 
@@ -31,6 +32,7 @@ export function ChecklistItem({ judged, view }: Props): ReactElement | null {
       <Reason judged={judged} view={view} />
       <Silenced judged={judged} told={view.told} />
       <Exceptions judged={judged} told={view.told} />
+      <WhyDetails id={judged.id} view={view} />
     </RuleCard>
   );
 }

@@ -3,6 +3,7 @@ import { CitedList } from '@/components/regions/cited-list';
 import { LinkButton } from '@/components/ui/link-button';
 import type { LoadedLine, RegionChecklist } from '@/lib/checks/domain/checklist';
 import { sectionsOf } from '@/lib/checks/domain/sections';
+import type { Explanation } from '@/lib/checks/domain/why';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import { words } from '@/lib/kernel/words';
 import { citeSources } from '@/lib/regions/domain/cited-sources';
@@ -15,6 +16,7 @@ export type Report = {
   readonly regions: readonly RegionChecklist[];
   readonly lines: readonly LoadedLine[];
   readonly openQuestions: readonly ReadonlyMap<string, readonly string[]>[];
+  readonly explanation: Explanation;
   readonly declined: readonly string[];
   readonly placeNames: ReadonlyMap<string, string>;
   readonly today: CalendarDate;
@@ -67,6 +69,7 @@ function OnePlace({ report, region, line, index }: OneProps): ReactElement {
     told,
     sheetNames: namesOfLine(line),
     open: report.openQuestions[index] ?? new Map(),
+    whys: report.explanation.whys,
     authority: region.authorities[0]?.name ?? null,
     numberOf: cited.numberOf,
   };
@@ -77,7 +80,7 @@ function OnePlace({ report, region, line, index }: OneProps): ReactElement {
           <a href={report.here}>{words('checks.compare.back')}</a>
         </p>
       )}
-      <PlaceChecklist region={region} view={view} />
+      <PlaceChecklist region={region} view={view} timeline={report.explanation.timeline} />
       <section className="mt-8" aria-labelledby="sources">
         <h2 id="sources">{words('checks.result.sources')}</h2>
         <CitedList list={cited.list} />

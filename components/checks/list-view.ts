@@ -1,3 +1,4 @@
+import type { Why } from '@/lib/checks/domain/why';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import type { SheetNames } from '@/lib/regions/domain/sheet-names';
 import type { ToldRule, ToldSource } from '@/lib/regions/domain/told-rule';
@@ -10,6 +11,8 @@ export type ListView = {
   readonly placeNames: ReadonlyMap<string, string>;
   /** Questions each open line turns on. */
   readonly open: ReadonlyMap<string, readonly string[]>;
+  /** Why each line stands as it does. */
+  readonly whys: ReadonlyMap<string, Why>;
   readonly declined: readonly string[];
   /** Address of the check, to answer from the list; null on a dated copy. */
   readonly base: string | null;

@@ -2,21 +2,23 @@ import type { ReactElement } from 'react';
 import { DefinitionList } from '@/components/ui/definition-list';
 import type { RegionChecklist } from '@/lib/checks/domain/checklist';
 import { sectionsOf } from '@/lib/checks/domain/sections';
+import type { TimelineStep } from '@/lib/checks/domain/timeline';
 import { sayDate } from '@/lib/kernel/say';
 import { words } from '@/lib/kernel/words';
 import { ChecklistSections } from './checklist-sections';
+import { ChangeList } from './changes-panel';
 import type { ListView } from './list-view';
 import { WhomToAsk } from './whom-to-ask';
 
-type Props = { readonly region: RegionChecklist; readonly view: ListView };
+type Props = { readonly region: RegionChecklist; readonly view: ListView; readonly timeline: readonly TimelineStep[] };
 
 /** The whole checklist for one place. */
-export function PlaceChecklist({ region, view }: Props): ReactElement {
+export function PlaceChecklist({ region, view, timeline }: Props): ReactElement {
   return (
     <>
       <Counts region={region} />
       <ChecklistSections region={region} view={view} />
-      <Coming region={region} />
+      <Coming region={region} timeline={timeline} />
       <Classes region={region} view={view} />
       <NotInherited region={region} />
       <WhomToAsk {...region} placeNames={view.placeNames} />
@@ -46,8 +48,8 @@ function Counts({ region }: Pick<Props, 'region'>): ReactElement {
   );
 }
 
-function Coming({ region: { coming, code } }: Pick<Props, 'region'>): ReactElement | null {
-  if (coming.length === 0) return null;
+function Coming({ region: { coming, code }, timeline }: Pick<Props, 'region' | 'timeline'>): ReactElement | null {
+  if (coming.length === 0 && timeline.length === 0) return null;
   const id = `${code}-coming`;
   return (
     <section className="mt-8" aria-labelledby={id}>
@@ -59,11 +61,30 @@ function Coming({ region: { coming, code } }: Pick<Props, 'region'>): ReactEleme
           </li>
         ))}
       </ul>
+      {timeline.length === 0 ? null : <Timeline steps={timeline} />}
     </section>
   );
 }
 
-function Classes({ region: { categories, code }, view }: Props): ReactElement | null {
+/** What each coming day changes for this very piece. */
+function Timeline({ steps }: { readonly steps: readonly TimelineStep[] }): ReactElement {
+  return (
+    <>
+      <h3 className="mt-4">{words('checks.coming.title')}</h3>
+      <p>{words('checks.coming.text')}</p>
+      <ol>
+        {steps.map(({ on, changes }) => (
+          <li key={on} className="py-1">
+            <p>{words('checks.coming.from', { date: sayDate(on) })}</p>
+            {changes === null ? <p>{words('checks.coming.unreadable')}</p> : <ChangeList changes={changes} />}
+          </li>
+        ))}
+      </ol>
+    </>
+  );
+}
+
+function Classes({ region: { categories, code }, view }: Omit<Props, 'timeline'>): ReactElement | null {
   const possible = categories.filter((category) => category.possible);
   if (possible.length === 0) return null;
   const id = `${code}-categories`;

@@ -8,6 +8,7 @@ import type { Ctx } from '@/lib/server/ctx';
 import { keptSince, keptUntil } from './check-age';
 import type { LoadedLine } from './domain/checklist';
 import type { CheckId } from './domain/ids';
+import type { Place } from './domain/line';
 import { nextOver, type NextQuestion } from './domain/next-over';
 import { loadLines } from '@/lib/server/load-lines';
 
@@ -16,6 +17,8 @@ export type OpenCheck = {
   readonly check: Check;
   readonly on: CalendarDate;
   readonly lines: readonly LoadedLine[];
+  /** Every place that is part of another on that day. */
+  readonly places: readonly Place[];
   readonly next: NextQuestion | null;
   readonly stillMatters: readonly string[];
   /** Names of every place, by code. */
@@ -30,7 +33,7 @@ export async function readCheck(ctx: Ctx, id: CheckId): Promise<Result<OpenCheck
   const on = check.saleOn ?? calendarDateOf(ctx.now);
   const [loaded, regions] = await Promise.all([loadLines(ctx.db, check.regions, on), listRegions(ctx.db)]);
   if (!loaded.ok) throw new Error(`The sheet of "${loaded.error.code}" is gone, and check ${id} is read from it`);
-  const { lines } = loaded.value;
+  const { lines, places } = loaded.value;
   const names = new Map(regions.map(({ code, name }) => [code, name]));
-  return ok({ check, on, lines, ...nextOver(lines, check.answers, check.declined), names, keptUntil: keptUntil(check.touchedAt) });
+  return ok({ check, on, lines, places, ...nextOver(lines, check.answers, check.declined), names, keptUntil: keptUntil(check.touchedAt) });
 }

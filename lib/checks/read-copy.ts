@@ -6,9 +6,11 @@ import { calendarDateOf, type CalendarDate } from '@/lib/kernel/calendar-date';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { Ctx } from '@/lib/server/ctx';
 import { judgeLines, type Checklist } from './build-checklist';
+import { QUESTIONS } from './domain/questions';
 import { changesBetween, type StatusChange } from './domain/status-change';
 import { SEMANTICS, type DatedCopy } from './domain/dated-copy';
 import type { LoadedLine } from './domain/checklist';
+import { explain, type Explanation } from './domain/why';
 import type { CopyHash } from './domain/ids';
 import { loadLine, loadLines } from '@/lib/server/load-lines';
 import { openQuestionsOf, type OpenQuestions } from './read-result';
@@ -23,12 +25,13 @@ export type ReadCopy = {
   readonly changes: readonly StatusChange[] | null;
   readonly lines: readonly LoadedLine[];
   readonly openQuestions: readonly OpenQuestions[];
+  readonly explanation: Explanation;
   /** Names of every place, by code. */
   readonly names: ReadonlyMap<string, string>;
 };
 
-/** Judges a kept copy again out of the very editions it rested on, and compares with today. */
-export async function readCopy(ctx: Ctx, hash: CopyHash): Promise<Result<ReadCopy, { kind: 'not-found' }>> {
+/** Judges a kept copy again out of the very editions it rested on, and compares with today. `place` is the one shown in full. */
+export async function readCopy(ctx: Ctx, hash: CopyHash, place: string | null): Promise<Result<ReadCopy, { kind: 'not-found' }>> {
   const kept = await findCopy(ctx.db, hash);
   if (kept === null) return err({ kind: 'not-found' });
   if (fingerprint(kept.text) !== hash) throw new Error(`The dated copy ${hash} was changed after it was made`);
@@ -49,6 +52,7 @@ export async function readCopy(ctx: Ctx, hash: CopyHash): Promise<Result<ReadCop
     changes: await changesSince(ctx, copy, checklist, today),
     lines,
     openQuestions: openQuestionsOf(lines, checklist, copy),
+    explanation: explain({ ...copy, lines, questions: QUESTIONS }, place),
     names: new Map((await listRegions(ctx.db)).map(({ code, name }) => [code, name])),
   });
 }

@@ -111,7 +111,7 @@ test('CHECK-48 after a changed answer the list says what changed since the one s
   await say('depth-mm', { 'depth-mm': ['20'], 'capacity-ml.unknown': ['on'] }, ['depth-mm', 'capacity-ml']);
   await showChecklist(today, { id: ID });
   await showChecklist(today, { id: ID });
-  const result = await readResult(today, ID);
+  const result = await readResult(today, ID, null);
   if (!result.ok) throw new Error('The check is gone');
   expect(result.value.changes).toContainEqual({
     region: 'dk',
@@ -128,8 +128,8 @@ test('CHECK-49 a dated copy shows the same list for ever, judged from the editio
   const kept = await keepCheckCopy(today, { id: ID });
   if (!kept.ok) throw new Error('The check is gone');
   const hash = copyHash.parse(kept.value.hash);
-  const first = await readCopy(today, hash);
-  const later = await readCopy(at('2031-05-01T00:00:00Z'), hash);
+  const first = await readCopy(today, hash, null);
+  const later = await readCopy(at('2031-05-01T00:00:00Z'), hash, null);
   if (!first.ok || !later.ok) throw new Error('The copy is gone');
   expect(later.value.checklist).toEqual(first.value.checklist);
   expect(first.value.changes).toEqual([]);

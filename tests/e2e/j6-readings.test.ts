@@ -64,6 +64,7 @@ describe.each([
     expect(await table.innerText()).toMatch(/Within the limit|Over the limit|Test more pieces|Cannot tell/);
     expect(await table.innerText()).toMatch(/Compared: 0\.31/);
     expect(await table.innerText()).toMatch(/at most 0\.01/);
+    await table.getByText('How it is decided, and the source').first().click();
     expect(await table.getByRole('link', { name: 'The rule in full' }).count()).toBeGreaterThan(0);
     expect(await page.getByText('This list is not proof.').first().isVisible()).toBe(true);
     const chart = page.getByRole('img', { name: /Lead \(Pb\), Vessel: reading and limits/ }).first();

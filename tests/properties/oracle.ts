@@ -51,6 +51,8 @@ export type Oracle = {
   readonly attackers: (rule: string) => readonly string[];
   /** The other rules that disagree with it while both are effective. */
   readonly rivals: (rule: string) => readonly string[];
+  /** The fewest questions in which a world with that outcome goes against what was said; null where there is no such world. */
+  readonly fewestChanges: (rule: string, answers: Said, wanted: boolean) => number | null;
   readonly worlds: number;
 };
 
@@ -287,6 +289,16 @@ export function oracleOf(written: Written): Oracle {
     });
   };
 
+  const fewestChanges = (rule: string, answers: Said, wanted: boolean): number | null => {
+    const against = questions.map((question, at) =>
+      (facts[at] ?? []).map((fact) => Object.hasOwn(answers, question.id) && !agrees(question, fact, answers[question.id])),
+    );
+    const counts = worlds
+      .filter((world) => valueOf(rule)(world) === wanted)
+      .map((world) => against.filter((own, at) => own[Math.floor(world / (strides[at] ?? 1)) % own.length] === true).length);
+    return counts.length === 0 ? null : Math.min(...counts);
+  };
+
   return {
     rules: active.map(({ id }) => id),
     truthOf: (rule, answers) => truth(valueOf(rule), answers),
@@ -299,6 +311,7 @@ export function oracleOf(written: Written): Oracle {
     gateRestsOn: (question, answers) => restsOn(gateValue(question), answers),
     attackers: attackersOf,
     rivals,
+    fewestChanges,
     worlds: worlds.length,
   };
 }

@@ -18,13 +18,15 @@ export type Test =
     }
   | { readonly kind: 'within'; readonly question: number; readonly code: string };
 
-/** A condition with its questions and terms looked up; `term` is a position in the line's list of terms. */
+/**
+ * A condition with its questions and terms looked up, and how each was written; `term` is a position in the line's list of terms.
+ */
 export type Reading =
   | { readonly kind: 'always'; readonly holds: boolean }
   | { readonly kind: 'all' | 'any'; readonly parts: readonly Reading[] }
   | { readonly kind: 'not'; readonly part: Reading }
-  | { readonly kind: 'test'; readonly test: Test }
-  | { readonly kind: 'term'; readonly term: number };
+  | { readonly kind: 'test'; readonly test: Test; readonly leaf: Condition }
+  | { readonly kind: 'term'; readonly term: number; readonly id: string };
 
 export type ReadFault = Pick<CompileFault, 'kind' | 'about'>;
 
@@ -66,12 +68,12 @@ function readNot(condition: Condition, { scope, level }: At): Result<Reading, Re
 
 function readTerm(id: string, { termOf }: Scope): Result<Reading, ReadFault> {
   const term = termOf(id);
-  return term === null ? err({ kind: 'unknown-term', about: id }) : ok({ kind: 'term', term });
+  return term === null ? err({ kind: 'unknown-term', about: id }) : ok({ kind: 'term', term, id });
 }
 
 function readLeaf(leaf: Leaf, scope: Scope): Result<Reading, ReadFault> {
   const test = readTest(leaf, scope);
-  return test.ok ? ok({ kind: 'test', test: test.value }) : test;
+  return test.ok ? ok({ kind: 'test', test: test.value, leaf }) : test;
 }
 
 /** A leaf as a test of its question, or the fault that keeps it from being one. */

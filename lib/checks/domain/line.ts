@@ -1,7 +1,7 @@
 import { err, ok, type Result } from '@/lib/kernel/result';
 import { rankRules, readAttacks, type RankedRule } from './attacks';
 import { cutSpace, type OwnedTest, type QuestionCells, type Variables } from './cells';
-import { compileCondition, keep, type Compiled, type Workshop } from './compile-condition';
+import { compileCondition, keep, nodesIn, renameNodes, type Compiled, type Part, type Workshop } from './compile-condition';
 import { readCondition, type Reading, type Scope, type Test } from './condition-reading';
 import { questionsOf, type Diagram } from './diagram';
 import { DiagramBuilder, keepReachable } from './diagram-builder';
@@ -13,12 +13,22 @@ import { namesOfTerms, readTerms, type Terms } from './terms';
 export type { CompileFault, EngineRule, EngineTerm, Layer, LineInput, Place } from './line-input';
 
 /** A rule as compiled: `node` and `slot` hold when it is effective, that is, when it applies and no attacker is effective. */
-export type CompiledRule = Compiled & {
+export type CompiledRule = Omit<Compiled, 'part'> & {
   readonly id: string;
   readonly region: string;
   /** Positions in rank order: the rules that attack it, and those that stand beside it in disagreement. */
   readonly attackers: readonly number[];
   readonly disagrees: readonly number[];
+};
+
+/** The conditions as they are written, part by part, over a diagram of their own: two wordings of one meaning differ only here. */
+export type Wording = {
+  readonly diagram: Diagram;
+  /** In rank order: when a rule applies, whoever attacks it. */
+  readonly rules: readonly Part[];
+  readonly terms: readonly (Part | null)[];
+  /** By position of the gated question. */
+  readonly gates: ReadonlyMap<number, Part>;
 };
 
 /** One place's rules on one day, ready to be judged as often as wanted. */
@@ -35,6 +45,7 @@ export type CompiledLine = {
   readonly gates: ReadonlyMap<number, number>;
   readonly diagram: Diagram;
   readonly tape: Tape;
+  readonly wording: Wording;
 };
 
 /** An active rule with every name in it looked up. */
@@ -96,15 +107,17 @@ function testsIn(reading: Reading): readonly Test[] {
 }
 
 /** Gates first, then terms after those they use, then rules from the highest rank down: attackers before their targets. */
-function build({ terms, rules }: ReadLine, gates: readonly Gate[], shop: Workshop): Result<readonly CompiledRule[], CompileFault> {
-  for (const { question, test } of gates) shop.gates[question] = keep(compileCondition({ kind: 'test', test }, shop), shop);
+function build({ terms, rules }: ReadLine, gates: readonly Gate[], shop: Workshop): Result<readonly BuiltRule[], CompileFault> {
+  for (const { question, test, leaf } of gates) {
+    shop.gates[question] = keep(compileCondition({ kind: 'test', test, leaf }, shop), shop);
+  }
   for (const place of terms.inOrder) {
     const term = terms.list[place];
     if (term === undefined) continue;
     shop.terms[place] = keep(compileCondition(term.reading, shop), shop);
     if (shop.builder.store.overfull) return err({ kind: 'too-many-nodes', in: term.id });
   }
-  const built: CompiledRule[] = [];
+  const built: BuiltRule[] = [];
   for (const [fromTop, rule] of rules.toReversed().entries()) {
     const attackers = rule.attackers.flatMap((rank) => built[rules.length - 1 - rank] ?? []);
     const made = buildRule(rule, attackers, shop);
@@ -114,22 +127,25 @@ function build({ terms, rules }: ReadLine, gates: readonly Gate[], shop: Worksho
   return ok(built.toReversed());
 }
 
-function buildRule(read: ReadRule, attackers: readonly CompiledRule[], shop: Workshop): Result<CompiledRule, CompileFault> {
+type BuiltRule = CompiledRule & { readonly when: Part };
+
+function buildRule(read: ReadRule, attackers: readonly CompiledRule[], shop: Workshop): Result<BuiltRule, CompileFault> {
   const { id, region } = read.rule;
-  const nodes = [compileCondition(read.reading, shop)];
+  const when = compileCondition(read.reading, shop);
+  const nodes = [when.node];
   for (const attacker of attackers) {
     shop.tape.load(attacker.slot);
     shop.tape.not();
     nodes.push(shop.builder.not(attacker.node));
   }
   shop.tape.join('all', nodes.length);
-  const compiled = keep(shop.builder.all(nodes), shop);
+  const compiled = { node: shop.builder.all(nodes), slot: shop.tape.store(), when };
   if (shop.builder.store.overfull) return err({ kind: 'too-many-nodes', in: id });
   if (questionsOf(shop.builder.store, compiled.node).length > MOST_QUESTIONS) return err({ kind: 'too-many-questions', in: id });
   return ok({ ...compiled, id, region, attackers: read.attackers, disagrees: read.disagrees });
 }
 
-type Built = { readonly shop: Workshop; readonly rules: readonly CompiledRule[] };
+type Built = { readonly shop: Workshop; readonly rules: readonly BuiltRule[] };
 
 /** Drops what was only scaffolding from the diagrams. */
 function finish(input: LineInput, terms: Terms, { shop, rules }: Built): CompiledLine {
@@ -144,10 +160,25 @@ function finish(input: LineInput, terms: Terms, { shop, rules }: Built): Compile
     questions: input.questions.map(({ id }) => id),
     cells: byQuestion,
     variables,
-    rules: rules.map((rule) => ({ ...rule, node: renamed(rule.node) })),
+    rules: rules.map(({ when: _, ...rule }) => ({ ...rule, node: renamed(rule.node) })),
     terms: new Map(named.map(([id, node]) => [id, renamed(node)])),
     gates: new Map(gates.map(([question, node]) => [question, renamed(node)])),
     diagram,
     tape: shop.tape.finish(),
+    wording: keepWording({ shop, rules }),
+  };
+}
+
+function keepWording({ shop, rules }: Built): Wording {
+  const gates = shop.gates.flatMap((gate, question): (readonly [number, Part])[] => (gate === undefined ? [] : [[question, gate.part]]));
+  const terms = Array.from(shop.terms, (term) => term?.part ?? null);
+  const parts = [...rules.map(({ when }) => when), ...terms.flatMap((part) => part ?? []), ...gates.map(([, part]) => part)];
+  const { diagram, rename } = keepReachable(shop.builder.store, shop.space.variables, parts.flatMap(nodesIn));
+  const renamed = (part: Part): Part => renameNodes(part, (node) => rename[node]!);
+  return {
+    diagram,
+    rules: rules.map(({ when }) => renamed(when)),
+    terms: terms.map((part) => (part === null ? null : renamed(part))),
+    gates: new Map(gates.map(([question, part]) => [question, renamed(part)])),
   };
 }

@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import type { ReactElement } from 'react';
 import { ChangesPanel } from '@/components/checks/changes-panel';
+import { CheapestFact } from '@/components/checks/cheapest-fact';
 import { ChecklistReport } from '@/components/checks/checklist-report';
 import { PieceFigure } from '@/components/checks/piece-figure';
 import { ReportBanner } from '@/components/checks/report-banner';
@@ -26,11 +27,12 @@ export const metadata: Metadata = { title: `${words('checks.result.title')} – 
 
 export default async function ResultPage({ params, searchParams }: Props): Promise<ReactElement> {
   const id = checkId.safeParse((await params).checkId);
-  const place = (await searchParams).place;
+  const asked = (await searchParams).place;
+  const place = typeof asked === 'string' ? asked : null;
   const ctx = makeCtx();
-  const read = id.success ? await readResult(ctx, id.data) : null;
+  const read = id.success ? await readResult(ctx, id.data, place) : null;
   if (read?.ok !== true) notFound();
-  const { open, checklist, changes, openQuestions } = read.value;
+  const { open, checklist, changes, openQuestions, explanation } = read.value;
   const { check, names, lines, on } = open;
   const here = `/check/${check.id}`;
   const shown = check.regions.find((code) => code === place);
@@ -47,6 +49,7 @@ export default async function ResultPage({ params, searchParams }: Props): Promi
             placeNames={names}
           />
           <ChangesPanel changes={changes} />
+          <CheapestFact facts={explanation.facts} regions={checklist.regions} base={here} />
         </div>
         <div className="side-part mt-8 lg:mt-0">
           <PieceFigure answers={check.answers} />
@@ -57,6 +60,7 @@ export default async function ResultPage({ params, searchParams }: Props): Promi
         regions={checklist.regions}
         lines={lines}
         openQuestions={openQuestions}
+        explanation={explanation}
         declined={check.declined}
         placeNames={names}
         today={calendarDateOf(ctx.now)}

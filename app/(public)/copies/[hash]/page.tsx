@@ -25,10 +25,11 @@ export const metadata: Metadata = { title: words('checks.copy.title'), robots: {
 
 export default async function CopyPage({ params, searchParams }: Props): Promise<ReactElement> {
   const hash = copyHash.safeParse((await params).hash);
-  const place = (await searchParams).place;
-  const read = hash.success ? await readCopy(makeCtx(), hash.data) : null;
+  const asked = (await searchParams).place;
+  const place = typeof asked === 'string' ? asked : null;
+  const read = hash.success ? await readCopy(makeCtx(), hash.data, place) : null;
   if (read?.ok !== true) notFound();
-  const { copy, checklist, names, lines, openQuestions, today, madeOn } = read.value;
+  const { copy, checklist, names, lines, openQuestions, explanation, today, madeOn } = read.value;
   const places = sayList(copy.regions.map(({ code }) => names.get(code) ?? code));
   return (
     <>
@@ -55,12 +56,13 @@ export default async function CopyPage({ params, searchParams }: Props): Promise
         regions={checklist.regions}
         lines={lines}
         openQuestions={openQuestions}
+        explanation={explanation}
         declined={copy.declined}
         placeNames={names}
         today={today}
         here={`/copies/${checklist.copy}`}
         base={null}
-        place={typeof place === 'string' ? place : null}
+        place={place}
       />
       <Since read={read.value} />
     </>
