@@ -110,7 +110,7 @@ describe('on the founding sheets', () => {
     },
   );
 
-  test('CHECK-63 a line that begins within two years is told with its day', () => {
+  test('CHECK-63 a line that ends within two years is told with its day', () => {
     const loaded = seedLine('dk', on);
     const layers = loaded.layers.map((layer) => ({
       ...layer,
