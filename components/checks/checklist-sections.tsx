@@ -45,7 +45,7 @@ function ByTopic({ rules, view }: { readonly rules: readonly JudgedRule[]; reado
     <>
       {byTopic(rules).map((group) => (
         <div key={group.topic} className="mt-6">
-          <h3 className="font-sans text-plain font-strong text-umber">{words(`checks.topicNames.${group.topic}`)}</h3>
+          <h3 className="font-sans text-plain font-strong text-umber">{words(`regions.topic.${group.topic}`)}</h3>
           {group.rules.map((judged) => (
             <ChecklistItem key={judged.id} judged={judged} view={view} />
           ))}

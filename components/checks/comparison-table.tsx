@@ -38,7 +38,7 @@ export function ComparisonTable({ regions, placeNames, here }: Props): ReactElem
 
 function dutyWords({ topic, limit }: ComparisonRow): string {
   const part = PARTS.find((one) => one === limit?.part);
-  if (limit === null || part === undefined) return words(`checks.topicNames.${topic}`);
+  if (limit === null || part === undefined) return words(`regions.topic.${topic}`);
   return words('checks.compare.limit', { substance: saySubstance(limit.substance), part: words(`checks.compare.parts.${part}`) });
 }
 

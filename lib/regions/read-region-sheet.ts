@@ -5,13 +5,12 @@ import { calendarDateOf, type CalendarDate } from '@/lib/kernel/calendar-date';
 import { cautionFor } from '@/lib/server/caution';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { Ctx } from '@/lib/server/ctx';
+import { endOf } from '@/lib/server/load-lines';
 import { readEdition } from '@/lib/server/sheets';
 import { regionLine } from './domain/line';
 import { tellLayer, type RegionSheet } from './domain/told-sheet';
 
 export type { RegionSheet, SheetLayer, ToldTerm } from './domain/told-sheet';
-
-const DAY_MS = 86_400_000;
 
 /** The region sheet of a place as of a day, today when none is given. */
 export async function readRegionSheet(
@@ -25,7 +24,7 @@ export async function readRegionSheet(
   const line = regionLine(memberships, own.code, on);
   const base = regions.filter(({ kind }) => kind === 'base').map(({ code }) => code);
   const order = [...new Set([...base, ...line.layers])];
-  const heads = await listEditionsInUse(ctx.db, order, new Date(Date.parse(on) + DAY_MS));
+  const heads = await listEditionsInUse(ctx.db, order, endOf(on));
   const editions = await Promise.all(heads.map(({ region, number }) => readEdition(ctx.db, region, number)));
   const layers = order.flatMap((code) => editions.flatMap((edition) => (edition?.region === code ? [tellLayer(edition, on)] : [])));
   const sheet = layers.find(({ code }) => code === own.code);

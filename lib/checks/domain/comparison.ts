@@ -1,5 +1,5 @@
+import { TOPIC_ORDER } from '@/lib/regions/domain/sheet-reading';
 import type { JudgedRule, RegionChecklist } from './checklist';
-import { TOPIC_ORDER } from './sections';
 
 /** One duty side by side: for each place the lines about it, in the order of the places. */
 export type ComparisonRow = {

@@ -1,3 +1,4 @@
+import { TOPIC_ORDER } from '@/lib/regions/domain/sheet-reading';
 import type { JudgedRule } from './checklist';
 
 /** Parts of a checklist in the order they are read. */
@@ -40,26 +41,6 @@ export function sectionsOf(rules: readonly JudgedRule[]): Readonly<Record<Sectio
     'does-not-apply': part('does-not-apply'),
   };
 }
-
-/** Topics in the order a maker meets them. */
-export const TOPIC_ORDER: readonly JudgedRule['topic'][] = [
-  'limit',
-  'method',
-  'testing',
-  'firing',
-  'label',
-  'paper',
-  'registration',
-  'volume-threshold',
-  'representative',
-  'traceability',
-  'packaging',
-  'customs',
-  'surface',
-  'practice',
-  'cost',
-  'other',
-];
 
 /** The lines of a part by topic; topics without a line are left out. */
 export function byTopic(
