@@ -24,12 +24,13 @@ const head = {
 
 export const editionHeadRow = z.object(head).transform(({ in_use_from, ...row }): EditionHead => ({ ...row, inUseFrom: in_use_from }));
 
-// The document was validated when it was published and cannot be changed since (no grant, and its hash stands beside it).
+// Documents of the first editions have no trial pieces. All were validated when they were published and cannot be changed since:
+// no grant lets anyone, and the hash stands beside it.
 export const editionRow = z
   .object({ ...head, document: z.union([z.string(), z.looseObject({})]) })
   .transform(({ in_use_from, document, ...row }): Edition => {
-    const sheet = (typeof document === 'string' ? JSON.parse(document) : document) as Sheet;
-    return { ...row, inUseFrom: in_use_from, sheet };
+    const sheet = (typeof document === 'string' ? JSON.parse(document) : document) as Omit<Sheet, 'trials'> & Partial<Sheet>;
+    return { ...row, inUseFrom: in_use_from, sheet: { ...sheet, trials: sheet.trials ?? [] } };
   });
 
 export const sheetLockRow = z.object({ region: z.string(), edition_number: z.number() });

@@ -98,6 +98,17 @@ const term = z.strictObject({
   facts: z.array(slug).default([]),
 });
 
+const trial = z.strictObject({
+  id: slug,
+  title: words.max(120),
+  on: calendarDate,
+  answers: z.record(slug, z.json()),
+  declined: z.array(slug).default([]),
+  expected: z
+    .record(slug, z.enum(['applies', 'does-not-apply', 'not-settled', 'treat-as-applying', 'sources-disagree']))
+    .refine((it) => Object.keys(it).length > 0, { error: 'A trial piece expects something of one rule at least' }),
+});
+
 const contact = z.strictObject({ name: words, url: z.url().nullable(), role: words, evidence });
 
 export const membership = z.strictObject({
@@ -123,6 +134,7 @@ export const sheetDocument = z
     sources: z.array(source),
     terms: z.array(term).default([]),
     rules: z.array(rule),
+    trials: z.array(trial).default([]),
     leftOut: z.array(z.strictObject({ fact: slug, why: words })).default([]),
   })
   .superRefine((sheet, ctx) => {

@@ -1,5 +1,6 @@
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import type { Evidence, Rule, Source, Term } from './rule';
+import type { Trial } from './trial';
 
 /** Whom to ask: an authority of a place, or a body that accredits labs there. */
 export type Contact = {
@@ -37,6 +38,8 @@ export type Sheet = {
   readonly sources: readonly Source[];
   readonly terms: readonly Term[];
   readonly rules: readonly Rule[];
+  /** Example pieces with their expected lines; ids are unique within a sheet. */
+  readonly trials: readonly Trial[];
   /** Researched facts that no rule, term or text carries, each with the reason. */
   readonly leftOut: readonly { readonly fact: string; readonly why: string }[];
 };

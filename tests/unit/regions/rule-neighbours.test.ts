@@ -45,6 +45,7 @@ const aSheet = (sheet: Partial<Sheet> & Pick<Sheet, 'code'>): Sheet => ({
   memberships: [],
   text: 'Text.',
   textFacts: [],
+  trials: [],
   authorities: [],
   accreditation: [],
   gaps: [],
