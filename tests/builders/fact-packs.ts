@@ -24,8 +24,11 @@ const packs = readdirSync(FOLDER)
   .filter((name) => name.endsWith('.json'))
   .map((name) => pack.parse(JSON.parse(readFileSync(new URL(name, FOLDER), 'utf8'))));
 
+/** The code of the sheet that carries a pack's facts: as the pack writes it, but for ISO/IEC 17025, whose code has one part too many. */
+export const sheetCodeOf = (code: string): string => code.toLowerCase().replace(/^iso-iec-/, 'iso-');
+
 /** Facts by the code of the sheet that should carry them; those of ceramics science belong to `care`. */
 export const factsByRegion: ReadonlyMap<string, readonly Fact[]> = new Map([
-  ...packs.flatMap(({ regions }) => regions.map(({ code, facts }) => [code.toLowerCase(), facts] as const)),
+  ...packs.flatMap(({ regions }) => regions.map(({ code, facts }) => [sheetCodeOf(code), facts] as const)),
   ['care', packs.flatMap(({ facts }) => facts)] as const,
 ]);

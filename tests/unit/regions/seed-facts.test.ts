@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { z } from 'zod';
-import type { Rule } from '@/lib/regions/domain/rule';
+import type { LimitPayload, Rule } from '@/lib/regions/domain/rule';
 import type { Sheet } from '@/lib/regions/domain/sheet';
 import { factsByRegion, type Fact } from '../../builders/fact-packs';
 import { aDate, seedLine, seedSheets } from '../../builders/seed-sheets';
@@ -8,16 +8,46 @@ import { aDate, seedLine, seedSheets } from '../../builders/seed-sheets';
 const sheets = [...seedSheets.values()];
 const factsOf = (sheet: Sheet) => factsByRegion.get(sheet.code) ?? [];
 const all = new Map([...factsByRegion.values()].flat().map((fact) => [fact.id, fact]));
+type LimitRule = Pick<Rule, 'from'> & { readonly payload: LimitPayload };
 const carriedBy = (rule: Rule) => rule.facts.flatMap((id) => all.get(id) ?? []);
 
-/** The figures a fact gives for a substance, "0.5 mg/L": alone or in a list. */
-function figuresOf(values: Fact['values'], substance: string): readonly string[] {
+/** A fact's unit without the words that say what is weighed, which a rule says by its part. */
+const unitOf = (unit: unknown): string =>
+  String(unit)
+    .replace(/ (total content|total weight|released)$/, '')
+    .replace(/^% by weight of .*$/, 'percent');
+
+const figures = z.record(z.string(), z.number());
+
+/**
+ * The figures a fact gives for a limit's substance, "0.5 mg/L": alone, by substance, or in a list, whose dated steps go by the
+ * rule's first day.
+ */
+function figuresOf(values: Fact['values'], { payload, from }: LimitRule): readonly string[] {
   const list = z.array(z.record(z.string(), z.unknown())).safeParse(values['limits']);
-  return [values, ...(list.success ? list.data : [])].flatMap((one) =>
-    'limit' in one && [one['symbol'], one['substance']].includes(substance)
-      ? [`${String(one['limit'])} ${String(one['unit']).replace(' total content', '')}`]
-      : [],
-  );
+  const steps = list.success ? list.data.filter((one) => !('from' in one) || one['from'] === from) : [];
+  const told = [values, ...steps].flatMap((found: Fact['values']) => {
+    const one = 'substance' in found || 'symbol' in found ? found : { ...values, ...found };
+    return 'limit' in one && [one['symbol'], one['substance']].includes(payload.substance)
+      ? [`${String(one['limit'])} ${unitOf(one['unit'])}`]
+      : [];
+  });
+  const bySubstance = [
+    { by: values['substances'], unit: values['unit'] },
+    { by: values['values_ug_per_dm2'], unit: 'ug/dm2' },
+  ].flatMap(({ by, unit }) => {
+    const figure = figures.safeParse(by).data?.[payload.substance];
+    return figure === undefined ? [] : [`${String(figure)} ${unitOf(unit)}`];
+  });
+  return [...told, ...bySubstance];
+}
+
+/** The figure of a fact that has one for each kind of ware: the one the rule names, else all of them. */
+function figuresByWare(values: Fact['values'], { payload }: LimitRule): readonly string[] {
+  const byWare = values['substance'] === payload.substance ? figures.safeParse(values['limits']).data : undefined;
+  const all = Object.values(byWare ?? {});
+  const named = all.filter((figure) => figure === payload.amount.value);
+  return (named.length > 0 ? named : all).map((figure) => `${String(figure)} ${unitOf(values['unit'])}`);
 }
 
 /** A rule that makes another's limit its own law carries that figure. */
@@ -56,10 +86,12 @@ describe.each(sheets.map((sheet) => [sheet.code, sheet] as const))('%s', (code, 
   });
 
   test('REG-13 a limit has the figure and unit that its fact gives for the substance', () => {
-    const rules = sheet.rules.flatMap(({ id, payload, facts }) => (payload.topic === 'limit' ? [{ id, payload, facts }] : []));
-    for (const { id, payload, facts } of rules) {
-      const figures = facts.flatMap((fact) => figuresOf(all.get(fact)?.values ?? {}, payload.substance));
-      const expected = figures.length > 0 ? figures : [targetOf(sheet, id)];
+    const rules = sheet.rules.flatMap(({ id, payload, facts, from }) => (payload.topic === 'limit' ? [{ id, payload, facts, from }] : []));
+    for (const { id, payload, facts, from } of rules) {
+      const values = facts.map((fact) => all.get(fact)?.values ?? {});
+      const told = values.flatMap((one) => figuresOf(one, { payload, from }));
+      const found = told.length > 0 ? told : values.flatMap((one) => figuresByWare(one, { payload, from }));
+      const expected = found.length > 0 ? found : [targetOf(sheet, id)];
       expect([id, ...new Set(expected)]).toEqual([id, `${String(payload.amount.value)} ${payload.amount.unit}`]);
     }
   });
@@ -87,6 +119,18 @@ describe.each(sheets.map((sheet) => [sheet.code, sheet] as const))('%s', (code, 
     const latest = (rule: Rule): string => (rule.payload.topic === 'limit' ? '2027-12-01' : '2028-06-01');
     expect(sheet.rules.filter((rule) => rule.lookAgainBy > latest(rule)).map(({ id }) => id)).toEqual([]);
   });
+});
+
+test('REG-10 every place and standard of the fact packs has a sheet', () => {
+  expect([...factsByRegion.keys()].filter((code) => !seedSheets.has(code))).toEqual([]);
+});
+
+test('REG-25 a place with limits of its own keeps eight trial pieces at least, any other place three', () => {
+  const few = sheets.filter(({ code, rules, trials }) => {
+    const least = rules.some(({ payload }) => payload.topic === 'limit') ? 8 : 3;
+    return code !== 'care' && trials.length < least;
+  });
+  expect(few.map(({ code, trials }) => `${code}: ${String(trials.length)}`)).toEqual([]);
 });
 
 test('REG-17 rule and term ids are of one sheet each', () => {
