@@ -5,8 +5,8 @@ import list from '@/content/words/allowed.json';
 
 const CONTENT = join(import.meta.dirname, '../../../content');
 /** Of a region sheet only what we say ourselves: titles and passages of sources are other people's words. */
-const OURS = new Set(['title', 'says', 'text', 'name', 'note', 'gaps']);
-const NOT_OURS = new Set(['sources', 'facts', 'authorities', 'accreditation']);
+const OURS = new Set(['title', 'says', 'text', 'name', 'note', 'gaps', 'doNow']);
+const NOT_OURS = new Set(['sources', 'facts', 'authorities', 'accreditation', 'lookedIn', 'heard']);
 
 type Said = { readonly where: string; readonly text: string };
 
@@ -38,7 +38,7 @@ const json = (file: string): unknown => JSON.parse(readFileSync(file, 'utf8'));
 const SAID: readonly Said[] = [
   ...filesIn(join(CONTENT, 'messages'), '.json').flatMap((file) => everyText(json(file), file)),
   ...filesIn(join(CONTENT, 'pages'), '.md').map((file) => ({ where: file, text: readFileSync(file, 'utf8') })),
-  ...filesIn(join(CONTENT, 'seed'), '.json').flatMap((file) => ownTexts(json(file), file)),
+  ...['seed', 'heard'].flatMap((name) => filesIn(join(CONTENT, name), '.json')).flatMap((file) => ownTexts(json(file), file)),
 ];
 
 const inWords = (phrases: readonly string[]): RegExp => new RegExp(`(?<![\\p{L}])(?:${phrases.join('|')})(?![\\p{L}])`, 'giu');
