@@ -28,8 +28,7 @@ function RuleList({ rules }: { readonly rules: readonly NamedRule[] }): ReactEle
     <ul className="mt-1 list-disc ps-6">
       {rules.map((rule) => (
         <li key={rule.id} className="mt-2">
-          {words('heard.place', { place: rule.place })}
-          <a href={`/rules/${rule.id}`}>{rule.title}</a>
+          {words('heard.place', { place: rule.place })} <a href={`/rules/${rule.id}`}>{rule.title}</a>
           <StrengthLine strength={rule.strength} standing={rule.standing} evidence={rule.evidence} />
           {rule.source !== null && <span className="block text-plain text-umber">{rule.source}</span>}
         </li>

@@ -28,7 +28,12 @@ export function WishedPlaces({ places, act }: { readonly places: readonly Wished
   );
 }
 
-type Props = { readonly countries: readonly Wished[]; readonly chosen?: string | undefined; readonly error?: string | undefined; readonly act: Act };
+type Props = {
+  readonly countries: readonly Wished[];
+  readonly chosen?: string | undefined;
+  readonly error?: string | undefined;
+  readonly act: Act;
+};
 
 /** Any country without a sheet, out of a list by name. */
 export function WishForm({ countries, chosen, error, act }: Props): ReactElement {

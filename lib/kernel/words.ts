@@ -1,7 +1,13 @@
 import { createTranslator } from 'use-intl/core';
+import accounts from '@/content/messages/en/accounts.json';
+import bench from '@/content/messages/en/bench.json';
 import broken from '@/content/messages/en/broken.json';
 import checks from '@/content/messages/en/checks.json';
+import editions from '@/content/messages/en/editions.json';
+import coverage from '@/content/messages/en/coverage.json';
+import heard from '@/content/messages/en/heard.json';
 import home from '@/content/messages/en/home.json';
+import library from '@/content/messages/en/library.json';
 import measures from '@/content/messages/en/measures.json';
 import pieces from '@/content/messages/en/pieces.json';
 import problems from '@/content/messages/en/problems.json';
@@ -9,6 +15,7 @@ import questions from '@/content/messages/en/questions.json';
 import readings from '@/content/messages/en/readings.json';
 import readingsPage from '@/content/messages/en/readings-page.json';
 import regions from '@/content/messages/en/regions.json';
+import sheetChecks from '@/content/messages/en/sheet-checks.json';
 import site from '@/content/messages/en/site.json';
 
 /** The one language there is so far. British, so that dates read "31 December". */
@@ -16,9 +23,15 @@ export const LOCALE = 'en-GB';
 
 /** Every message of the interface, by file name. A file that is added joins here. */
 export const MESSAGES = {
+  accounts,
+  bench,
   broken,
   checks,
+  editions,
+  coverage,
+  heard,
   home,
+  library,
   measures,
   pieces,
   problems,
@@ -26,6 +39,7 @@ export const MESSAGES = {
   readings,
   'readings-page': readingsPage,
   regions,
+  'sheet-checks': sheetChecks,
   site,
 };
 

@@ -99,7 +99,7 @@ test('CHECK-15 a rule is shown as its exact status, its rivals and what was decl
     RUNS,
   );
   for (const status of ['applies', 'does-not-apply', 'not-settled', 'treat-as-applying', 'sources-disagree'] as const) {
-    expect(seen.get(status) ?? 0, status).toBeGreaterThan(20);
+    expect(seen.get(status) ?? 0, status).toBeGreaterThanOrEqual(Math.floor(RUNS.numRuns / 100));
   }
 });
 

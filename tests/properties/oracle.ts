@@ -51,8 +51,12 @@ export type Oracle = {
   readonly attackers: (rule: string) => readonly string[];
   /** The other rules that disagree with it while both are effective. */
   readonly rivals: (rule: string) => readonly string[];
+  /** Two rules that replace the same target and are both effective in some world, unmarked, neither attacking the other. Lower rank first. */
+  readonly clashes: () => readonly { readonly target: string; readonly rules: readonly [string, string] }[];
   /** The fewest questions in which a world with that outcome goes against what was said; null where there is no such world. */
   readonly fewestChanges: (rule: string, answers: Said, wanted: boolean) => number | null;
+  /** The worlds in which two rules are not alike: one is effective and the other is not, or only one meets an effective rival. */
+  readonly differing: (one: string, other: string) => number;
   readonly worlds: number;
 };
 
@@ -289,6 +293,18 @@ export function oracleOf(written: Written): Oracle {
     });
   };
 
+  const clashes: Oracle['clashes'] = () =>
+    active.flatMap(({ id: target }) => {
+      const replacing = active.filter((rule) => rule.kind === 'replaces' && rule.targets.includes(target));
+      return replacing.flatMap((higher, at) =>
+        replacing.slice(0, at).flatMap((lower) => {
+          const settled = higher.targets.includes(lower.id) || higher.alongside.includes(lower.id) || lower.alongside.includes(higher.id);
+          const both = (world: number): boolean => valueOf(lower.id)(world) && valueOf(higher.id)(world);
+          return !settled && worlds.some(both) ? [{ target, rules: [lower.id, higher.id] as const }] : [];
+        }),
+      );
+    });
+
   const fewestChanges = (rule: string, answers: Said, wanted: boolean): number | null => {
     const against = questions.map((question, at) =>
       (facts[at] ?? []).map((fact) => Object.hasOwn(answers, question.id) && !agrees(question, fact, answers[question.id])),
@@ -299,8 +315,14 @@ export function oracleOf(written: Written): Oracle {
     return counts.length === 0 ? null : Math.min(...counts);
   };
 
+  const stance = (rule: string, world: number): string => {
+    if (!valueOf(rule)(world)) return 'no';
+    return rivals(rule).some((rival) => valueOf(rival)(world)) ? 'disputed' : 'yes';
+  };
+
   return {
     rules: active.map(({ id }) => id),
+    differing: (one, other) => worlds.filter((world) => stance(one, world) !== stance(other, world)).length,
     truthOf: (rule, answers) => truth(valueOf(rule), answers),
     truthOfTerm: (term, answers) => {
       const found = termFor(term, layers.length - 1);
@@ -311,6 +333,7 @@ export function oracleOf(written: Written): Oracle {
     gateRestsOn: (question, answers) => restsOn(gateValue(question), answers),
     attackers: attackersOf,
     rivals,
+    clashes,
     fewestChanges,
     worlds: worlds.length,
   };

@@ -10,7 +10,7 @@ export type Answers = Readonly<Record<string, AnswerValue>>;
 export type Knowledge = { readonly masks: Int32Array };
 
 /** What the answers leave possible. An answer that is missing or of the wrong kind leaves everything possible. */
-export function knowledgeOf(line: CompiledLine, answers: Answers): Knowledge {
+export function knowledgeOf(line: Pick<CompiledLine, 'questions' | 'cells' | 'variables'>, answers: Answers): Knowledge {
   const masks = line.variables.all.slice();
   for (const [place, cut] of line.cells.entries()) {
     const id = line.questions[place];
