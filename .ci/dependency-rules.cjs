@@ -18,8 +18,10 @@ module.exports = {
   ],
   allowedSeverity: 'error',
   allowed: [
-    may(KERNEL, [KERNEL, npm('decimal.js', 'use-intl', 'zod'), '^content/messages/']),
+    may(KERNEL, [KERNEL, npm('use-intl', 'zod'), '^content/messages/']),
     may(DOMAIN, [KERNEL, DOMAIN, npm('diff', 'fuse.js', 'd3-[a-z]+')]),
+    // Synonyms are data, and part of how words are read wherever they are read.
+    may('^lib/search/domain/lexicon[.]ts$', '^content/words/synonyms[.]json$'),
     may('^content/', ['^content/', KERNEL, DOMAIN, '^lib/[^/]+/schema[.]ts$', npm('zod')]),
     may('^components/', [
       '^components/',
@@ -31,6 +33,8 @@ module.exports = {
     { from: { path: '^(db|lib/server|scripts)/' }, to: { dependencyTypes: ['core'] } },
     may('^db/seeds/', '^content/seed/'),
     may('^lib/server/', ['^(lib/server|db|content)/', '^package[.]json$', KERNEL, DOMAIN, '^node_modules/']),
+    // What the worker does is put together here, of every slice's use cases.
+    may('^lib/server/work/(handlers|rounds)[.]ts$', '^lib/'),
     // A use case knows its own slice, never another slice's use cases: pages compose slices, slices do not.
     may('^lib/(?!kernel/|server/)([^/]+)/[^/]+[.]ts$', [
       '^lib/$1/',
@@ -38,7 +42,7 @@ module.exports = {
       '^(db|content)/',
       KERNEL,
       DOMAIN,
-      npm('zod', 'server-only'),
+      npm('zod', 'server-only', 'fflate'),
     ]),
     may('^app/', ['^(app|components|lib|content)/', npm('next', 'next-auth', 'react', '@types/react', 'swr', '@fontsource[^/]*/[^/]+')]),
     // Beside the folders stand settings of tools, proxy.ts and instrumentation.ts.

@@ -1,8 +1,8 @@
 import { benchEngine } from './bench/engine';
 
-/* npm run bench [name]: measures and prints Markdown tables. Without a name, all of them. */
+/* npm run bench [-- name]: measures and prints Markdown tables. Without a name, all of them. */
 
-const BENCHES: Readonly<Record<string, () => string>> = { engine: benchEngine };
+const BENCHES: Readonly<Record<string, () => string | Promise<string>>> = { engine: benchEngine };
 
 const [wanted] = process.argv.slice(2);
 const chosen = Object.entries(BENCHES).filter(([name]) => wanted === undefined || name === wanted);
@@ -10,4 +10,4 @@ if (chosen.length === 0) {
   console.error(`There is no benchmark "${wanted ?? ''}". There are: ${Object.keys(BENCHES).join(', ')}`);
   process.exitCode = 1;
 }
-for (const [name, run] of chosen) console.log(`## ${name}\n\n${run()}\n`);
+for (const [name, run] of chosen) console.log(`## ${name}\n\n${await run()}\n`);

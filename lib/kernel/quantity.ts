@@ -1,5 +1,3 @@
-import { Decimal } from 'decimal.js';
-
 /** Units a question or a rule's threshold may use. Currencies (ISO 4217, upper case) are the units of money. */
 export type Unit = 'mm' | 'cm' | 'mL' | 'L' | 'C' | 'percent' | 'pieces' | 'kg' | 'g' | 'people';
 
@@ -8,21 +6,23 @@ export type Money = { readonly amount: string; readonly currency: string };
 /** An amount as a whole number of millionths of its base unit. Comparing two of them is exact. */
 export type Millionths = bigint;
 
-const BASE: Readonly<Record<Unit, readonly [base: Unit, factor: string]>> = {
-  mm: ['mm', '1'],
-  cm: ['mm', '10'],
-  mL: ['mL', '1'],
-  L: ['mL', '1000'],
-  C: ['C', '1'],
-  percent: ['percent', '1'],
-  pieces: ['pieces', '1'],
-  kg: ['kg', '1'],
-  g: ['kg', '0.001'],
-  people: ['people', '1'],
+/** The unit each is compared in, and how many decimal places its millionths lie below it: a centimetre is 10⁷ millionths of a millimetre. */
+const BASE: Readonly<Record<Unit, readonly [base: Unit, places: number]>> = {
+  mm: ['mm', 6],
+  cm: ['mm', 7],
+  mL: ['mL', 6],
+  L: ['mL', 9],
+  C: ['C', 6],
+  percent: ['percent', 6],
+  pieces: ['pieces', 6],
+  kg: ['kg', 6],
+  g: ['kg', 3],
+  people: ['people', 6],
 };
+const MONEY_PLACES = 6;
 
 const CURRENCY = /^[A-Z]{3}$/;
-const Exact = Decimal.clone({ precision: 60, rounding: Decimal.ROUND_HALF_UP });
+const NUMBER = /^(-?)(\d{1,18})(?:\.(\d{1,40}))?(?:e([+-]?\d{1,2}))?$/i;
 
 export const isUnit = (text: string): text is Unit => Object.hasOwn(BASE, text);
 export const isCurrency = (text: string): boolean => CURRENCY.test(text);
@@ -38,9 +38,17 @@ export function baseUnit(unit: string): string | null {
  * Null when the text is no plain decimal number or the unit is not known.
  */
 export function millionths(value: number | string, unit: string): Millionths | null {
-  const base = baseUnit(unit);
-  const text = typeof value === 'number' ? String(value) : value;
-  if (base === null || !/^-?\d{1,18}(\.\d{1,40})?(e[+-]?\d{1,2})?$/i.test(text)) return null;
-  const factor = isUnit(unit) ? BASE[unit][1] : '1';
-  return BigInt(new Exact(text).times(factor).times(1_000_000).toFixed(0));
+  const parts = baseUnit(unit) === null ? null : NUMBER.exec(String(value));
+  if (parts === null) return null;
+  const [, sign, whole = '', rest = '', power = '0'] = parts;
+  const places = (isUnit(unit) ? BASE[unit][1] : MONEY_PLACES) + Number(power) - rest.length;
+  const size = shifted(BigInt(whole + rest), places);
+  return sign === '-' ? -size : size;
+}
+
+/** `digits` times ten to the power of `places`, rounded half up. */
+function shifted(digits: bigint, places: number): bigint {
+  if (places >= 0) return digits * 10n ** BigInt(places);
+  const divisor = 10n ** BigInt(-places);
+  return (2n * digits + divisor) / (2n * divisor);
 }

@@ -34,7 +34,7 @@ async function verdictsOf(body: unknown) {
 for (const { file, table } of readingTables) {
   test(`READ-26 every row of ${file} comes out the same over /api/v1/verdicts`, async () => {
     for (const { name, region, source, expect: lines, ...body } of table) {
-      const found = await verdictsOf({ regions: [region], on: '2026-12-01', answers: {}, ...body });
+      const found = await verdictsOf({ regions: [region], on: '2026-12-01', ...body });
       expect(found.length, `${name} (${source})`).toBeGreaterThan(0);
       expectLines(found, lines);
     }

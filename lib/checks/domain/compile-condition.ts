@@ -67,8 +67,7 @@ export function nodesIn(part: Part): readonly number[] {
 }
 
 function compileJoined({ kind, parts: readings }: Joined, shop: Workshop): Part {
-  const parts = readings.map((part) => compileCondition(part, shop));
-  shop.tape.join(kind, parts.length);
+  const parts = shop.tape.group(kind, readings, (part) => compileCondition(part, shop));
   return { kind, node: shop.builder[kind](parts.map(({ node }) => node)), parts };
 }
 

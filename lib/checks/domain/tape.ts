@@ -13,16 +13,21 @@ const STORE = 3;
 const NOT = 4;
 const LEAST = 5;
 const MOST = 6;
+/** A test that leaves its group if it alone decides it. */
+const TEST_OR_LEAVE = 7;
 
 /** Writes a tape, one instruction after another. */
 export class TapeWriter {
   private readonly code: number[] = [];
+  /** Where the last test begins; before the first, far from anything. */
+  private lastTest = -9;
   private depth = 0;
   private deepest = 0;
   private slots = 0;
 
   /** Pushes whether the variable lies in one of the cells of the mask. */
   test(variable: number, mask: number): void {
+    this.lastTest = this.code.length;
     this.code.push(TEST, variable, mask);
     this.move(1);
   }
@@ -60,8 +65,30 @@ export class TapeWriter {
     this.move(1 - count);
   }
 
+  /**
+   * Writes parts one after another and joins them. Once a test among them alone decides, the rest are passed over: the result
+   * is the same, since nothing lies below "no" or above "yes".
+   */
+  group<Part, Made>(kind: 'all' | 'any', parts: readonly Part[], write: (part: Part) => Made): readonly Made[] {
+    const exits: number[] = [];
+    const made = parts.map((part, before) => {
+      if (before > 0 && this.lastTest === this.code.length - 3) exits.push(this.leave(kind, before));
+      return write(part);
+    });
+    this.join(kind, parts.length);
+    for (const exit of exits) this.code[exit] = this.code.length;
+    return made;
+  }
+
   finish(): Tape {
     return { code: Int32Array.from(this.code), slots: this.slots, deepest: this.deepest };
+  }
+
+  /** Lets the test just written leave a group of which it is the `count`th part. Answers with the place to say whereto. */
+  private leave(kind: 'all' | 'any', count: number): number {
+    this.code[this.lastTest] = TEST_OR_LEAVE;
+    this.code.push(kind === 'all' ? NO : YES, count, 0);
+    return this.code.length - 1;
   }
 
   private move(by: number): void {
@@ -76,35 +103,46 @@ export function runTape(tape: Tape, masks: Int32Array): Int32Array {
   const slots = new Int32Array(tape.slots);
   const stack = new Int32Array(tape.deepest + 1);
   let top = -1;
-  for (let here = 0; here < code.length; here += 1) {
-    const instruction = code[here]!;
-    if (instruction === NOT) {
-      stack[top] = 2 - stack[top]!;
-      continue;
-    }
-    here += 1;
-    const operand = code[here]!;
-    switch (instruction) {
+  let here = 0;
+  while (here < code.length) {
+    const operand = code[here + 1]!;
+    switch (code[here]!) {
       case TEST:
-        here += 1;
         top += 1;
-        stack[top] = compare(masks[operand]!, code[here]!);
+        stack[top] = compare(masks[operand]!, code[here + 2]!);
+        here += 3;
         break;
+      case TEST_OR_LEAVE: {
+        const value = compare(masks[operand]!, code[here + 2]!);
+        const isDecided = value === code[here + 3]!;
+        top -= isDecided ? code[here + 4]! - 2 : -1;
+        stack[top] = value;
+        here = isDecided ? code[here + 5]! : here + 6;
+        break;
+      }
       case PUSH:
         top += 1;
         stack[top] = operand;
+        here += 2;
         break;
       case LOAD:
         top += 1;
         stack[top] = slots[operand]!;
+        here += 2;
         break;
       case STORE:
         slots[operand] = stack[top]!;
         top -= 1;
+        here += 2;
+        break;
+      case NOT:
+        stack[top] = 2 - stack[top]!;
+        here += 1;
         break;
       default:
         top -= operand - 1;
-        stack[top] = extreme(stack, top, operand, instruction === LEAST ? NO : YES);
+        stack[top] = extreme(stack, top, operand, code[here] === LEAST ? NO : YES);
+        here += 2;
     }
   }
   return slots;
