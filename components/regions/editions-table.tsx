@@ -35,11 +35,27 @@ export function EditionsTable({ sheet, editions }: Props): ReactElement {
           number: <a href={`/regions/${sheet.code}/editions/${String(number)}`}>{words('regions.editions.link', { number })}</a>,
           from: <Instant at={inUseFrom} />,
           to: inUseTo === null ? words('regions.editions.now') : <Instant at={inUseTo} />,
-          summary,
+          summary: <Summary code={sheet.code} number={number} summary={summary} />,
           hash: <code className="break-all text-small">{hash}</code>,
         },
       }))}
     />
+  );
+}
+
+type SummaryProps = Pick<Edition, 'number' | 'summary'> & { readonly code: string };
+
+/** What an edition is, and what it changed. */
+function Summary({ code, number, summary }: SummaryProps): ReactElement {
+  if (number === 1) return <>{summary}</>;
+  const address = `/regions/${code}/editions/compare?from=${String(number - 1)}&to=${String(number)}`;
+  return (
+    <>
+      {summary}{' '}
+      <a href={address} aria-label={words('editions.linkOf', { number })} className="block">
+        {words('editions.link')}
+      </a>
+    </>
   );
 }
 

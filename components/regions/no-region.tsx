@@ -6,7 +6,7 @@ import { foldText } from '@/lib/regions/domain/region-search';
 
 type Props = { readonly asked: string; readonly nearest: readonly ListedRegion[] };
 
-/** No sheet for what was sought: what was looked for, what that does not mean, the nearest names, and whom to ask. */
+/** No sheet for what was sought: what was looked for, what that does not mean, the nearest names, and how to ask for one. */
 export function NoRegion({ asked, nearest }: Props): ReactElement {
   const read = foldText(asked);
   return (
@@ -27,9 +27,12 @@ export function NoRegion({ asked, nearest }: Props): ReactElement {
         </div>
       )}
       <p>
-        <LinkButton kind="plain" href="/contact">
-          {words('regions.list.none.ask')}
+        <LinkButton kind="plain" href="/regions/wishes">
+          {words('library.wish.title')}
         </LinkButton>
+      </p>
+      <p>
+        <a href="/contact">{words('regions.list.none.ask')}</a>
       </p>
       <p>
         <a href="/regions">{words('regions.list.showAll')}</a>

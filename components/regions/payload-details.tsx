@@ -13,7 +13,7 @@ export function PayloadDetails({ payload }: { readonly payload: ToldPayload }): 
         <div key={line.name}>
           <dt>{line.name}</dt>
           <dd className="font-sans text-plain">
-            <Detail line={line} />
+            <PayloadDetail line={line} />
             {'fromMemory' in line ? (
               <>
                 {' '}
@@ -27,7 +27,8 @@ export function PayloadDetails({ payload }: { readonly payload: ToldPayload }): 
   );
 }
 
-function Detail({ line }: { readonly line: PayloadLine }): ReactElement {
+/** The words of one detail. */
+export function PayloadDetail({ line }: { readonly line: PayloadLine }): ReactElement {
   switch (line.kind) {
     case 'text':
       return <>{line.text}</>;

@@ -142,6 +142,16 @@ function MoreLinks({ sheet }: Pick<Props, 'sheet'>): ReactElement {
       <h2 id="more">{words('regions.sheet.links')}</h2>
       <ul className="mt-2 font-sans text-plain">
         <li>
+          <a className="inline-block py-2" href={`/sources?region=${sheet.code}`}>
+            {words('library.sources.ofSheet')}
+          </a>
+        </li>
+        <li>
+          <a className="inline-block py-2" href={`/changes?region=${sheet.code}`}>
+            {words('library.changes.title')}
+          </a>
+        </li>
+        <li>
           <a className="inline-block py-2" href={`/regions/${sheet.code}/editions`}>
             {words('regions.sheet.editions')}
           </a>

@@ -70,6 +70,11 @@ export function RulePage(props: Props): ReactElement {
       </Part>
       <ul className="not-in-print mt-8 font-sans text-plain">
         <li>
+          <a className="inline-block py-2" href={`/sources?rule=${rule.id}`}>
+            {words('library.sources.ofRule')}
+          </a>
+        </li>
+        <li>
           <a className="inline-block py-2" href={`/contact?about=/rules/${rule.id}`}>
             {words('regions.rule.doubt')}
           </a>

@@ -14,11 +14,14 @@ export function foldText(text: string): string {
     .trim();
 }
 
-/** What a place is found by besides its own name and code: other names for it. */
-export type OtherNames = Readonly<Record<string, string>>;
+/** What a place is found by besides its own name and code: other names for it, in any language. */
+export type OtherNames = Readonly<Record<string, string | readonly string[]>>;
 
-const namesOfPlace = ({ code, name }: Pick<ListedRegion, 'code' | 'name'>, others: OtherNames): string =>
-  foldText([name, code, others[code] ?? ''].join(' '));
+type Named = Pick<ListedRegion, 'code' | 'name'>;
+
+const wholeNames = ({ code, name }: Named, others: OtherNames): readonly string[] =>
+  [name, code, ...[others[code] ?? []].flat()].map(foldText);
+const wordsOf = (names: readonly string[]): readonly string[] => [...new Set(names.flatMap((name) => name.split(' ')))];
 
 /**
  * Places found by a reader's words: each word begins a word of the place's name, of its code, of another name, or of those
@@ -28,22 +31,31 @@ export function searchRegions(regions: readonly ListedRegion[], asked: string, o
   const sought = foldText(asked)
     .split(' ')
     .filter((word) => word !== '');
-  const said = new Map(regions.map((region) => [region.code, namesOfPlace(region, others)]));
+  const said = new Map(regions.map((region) => [region.code, wordsOf(wholeNames(region, others))]));
   return regions.filter(({ line, code }) => {
-    const known = [...new Set([...line, code])]
-      .map((layer) => said.get(layer) ?? layer)
-      .join(' ')
-      .split(' ');
+    const known = [...new Set([...line, code])].flatMap((layer) => said.get(layer) ?? [layer]);
     return sought.every((word) => known.some((own) => own.startsWith(word)));
   });
 }
 
+/** Places, such as countries without a sheet, that go by a name which begins with what was asked. Nothing asked finds none. */
+export function placesNamed<Place extends Named>(places: readonly Place[], asked: string, others: OtherNames): readonly Place[] {
+  const sought = foldText(asked);
+  if (sought.length < 2) return [];
+  return places.filter((place) =>
+    wholeNames(place, others).some((name) => name === sought || (sought.length > 2 && name.startsWith(sought))),
+  );
+}
+
 /** Places whose name is at most two slips away from what was asked, the nearest first. For when nothing was found. */
-export function nearestRegions(regions: readonly ListedRegion[], asked: string, others: OtherNames): readonly ListedRegion[] {
+export function nearestRegions<Place extends Named>(regions: readonly Place[], asked: string, others: OtherNames): readonly Place[] {
   const sought = foldText(asked);
   const most = sought.length > 5 ? 2 : 1;
   return regions
-    .map((region) => ({ region, slips: fewestSlips(sought, [foldText(region.name), ...namesOfPlace(region, others).split(' ')]) }))
+    .map((region) => {
+      const names = wholeNames(region, others);
+      return { region, slips: fewestSlips(sought, [...names, ...wordsOf(names)]) };
+    })
     .filter(({ slips }) => slips <= most && sought.length > 2)
     .sort((a, b) => a.slips - b.slips)
     .slice(0, 5)
@@ -53,7 +65,7 @@ export function nearestRegions(regions: readonly ListedRegion[], asked: string, 
 const fewestSlips = (sought: string, names: readonly string[]): number => Math.min(...names.map((name) => slipsBetween(sought, name)));
 
 /** Letters to add, drop, change or swap until one word is the other. */
-function slipsBetween(a: string, b: string): number {
+export function slipsBetween(a: string, b: string): number {
   if (Math.abs(a.length - b.length) > 2) return Infinity;
   let before: number[] = [];
   let last = Array.from({ length: b.length + 1 }, (_, place) => place);

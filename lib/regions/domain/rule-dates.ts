@@ -4,7 +4,8 @@ import { words } from '@/lib/kernel/words';
 
 const DAY_MS = 86_400_000;
 
-const dayBefore = (date: CalendarDate): CalendarDate => calendarDateOf(new Date(Date.parse(date) - DAY_MS));
+/** The last day on which it still held. */
+export const dayBefore = (date: CalendarDate): CalendarDate => calendarDateOf(new Date(Date.parse(date) - DAY_MS));
 
 type Span = { readonly from: CalendarDate | null; readonly to: CalendarDate | null };
 

@@ -28,6 +28,14 @@ export function substanceLimits(lines: readonly PlaceLine[], symbol: string, on:
   };
 }
 
+/** Every limit in a place's line on that day, its own first. A place without a sheet has none. */
+export function limitsOfLine({ line, layers }: PlaceLine, on: CalendarDate): readonly LimitRow[] {
+  const own = layers.at(-1);
+  if (own === undefined) return [];
+  const sheet = { ...own, on, line: line.layers, notInherited: line.except, above: layers.slice(0, -1), caution: '' };
+  return limitRows(sheet, namesOf(layers));
+}
+
 type Found = {
   readonly code: string;
   readonly name: string;
@@ -38,8 +46,7 @@ type Found = {
 function placeOf({ line, layers }: PlaceLine, symbol: string, on: CalendarDate): readonly Found[] {
   const own = layers.at(-1);
   if (own === undefined) return [];
-  const sheet = { ...own, on, line: line.layers, notInherited: line.except, above: layers.slice(0, -1), caution: '' };
-  const rows = limitRows(sheet, namesOf(layers)).filter(({ limit }) => limit.substance === symbol);
+  const rows = limitsOfLine({ line, layers }, on).filter(({ limit }) => limit.substance === symbol);
   const above = layers.slice(0, -1).filter(({ code }) => rows.some(({ rule }) => rule.region === code));
   return [
     {

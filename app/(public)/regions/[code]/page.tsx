@@ -3,7 +3,9 @@ import { notFound, redirect } from 'next/navigation';
 import type { ReactElement } from 'react';
 import { parseCalendarDate } from '@/lib/kernel/calendar-date';
 import { words } from '@/lib/kernel/words';
+import { placeWords } from '@/lib/regions/domain/condition-words';
 import { regionCode } from '@/lib/regions/schema';
+import { countryCodes } from '@/lib/server/world-map';
 import { drawSheet, findSheet } from './find-sheet';
 
 type Props = {
@@ -25,6 +27,7 @@ export default async function RegionPage({ params, searchParams }: Props): Promi
   const day = parseCalendarDate(asked);
   if (day !== null && regionCode.safeParse(code).success) redirect(`/regions/${code}/on/${day}`);
   const sheet = await findSheet(code);
+  if (sheet === null && countryCodes.includes(code)) redirect(`/regions?q=${encodeURIComponent(placeWords(code))}`);
   if (sheet === null) notFound();
   return drawSheet(sheet, asked === '' ? {} : { badDay: asked.slice(0, 40) });
 }

@@ -30,6 +30,9 @@ export default async function EditionsPage({ params }: Props): Promise<ReactElem
         <EditionsTable sheet={sheet} editions={editions.value} />
       </div>
       <p className="mt-6">
+        <a href={`/regions/${sheet.code}/editions/compare`}>{words('editions.chooseLink')}</a>
+      </p>
+      <p className="mt-3">
         <a href={`/regions/${sheet.code}`}>{words('regions.editions.back', { name: sheet.name })}</a>
       </p>
     </>
