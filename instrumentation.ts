@@ -4,8 +4,10 @@ import type { Instrumentation } from 'next';
 export async function register(): Promise<void> {
   if (process.env.NEXT_RUNTIME === 'nodejs') {
     const { readEnv } = await import('./lib/server/env');
+    const { notePeers } = await import('./lib/server/note-peers');
     const { sayErrorPages } = await import('./lib/server/say-error-pages');
     readEnv(); // A fault in the settings shows now, not at the first reader.
+    notePeers();
     sayErrorPages();
   }
 }

@@ -25,7 +25,7 @@ const config = {
   // `npm test` has a step of its own for types; a start should not wait for it, nor fail over the types of a test.
   typescript: { ignoreBuildErrors: true },
   reactStrictMode: true,
-  serverExternalPackages: ['knex', 'mysql2'],
+  serverExternalPackages: ['knex', 'mysql2', 'rate-limiter-flexible'],
   turbopack: { root: dirname(fileURLToPath(import.meta.url)) },
   experimental: { serverActions: { bodySizeLimit: '2mb' } },
   async headers() {

@@ -22,22 +22,25 @@ function pure(name: string, groupOrder: number): TestProjectConfiguration {
   };
 }
 
-const onDatabase: TestProjectConfiguration = {
-  resolve,
-  test: {
-    name: 'db',
-    environment: 'node',
-    include: ['tests/db/**/*.test.ts'],
-    globalSetup: ['tests/db/global.ts'],
-    setupFiles: ['tests/db/setup.ts'],
-    pool: 'forks',
-    execArgv: ['--import', 'tsx'],
-    maxWorkers: 2,
-    sequence: { groupOrder: 3 },
-    testTimeout: 30_000,
-    hookTimeout: 60_000,
-  },
-};
+/** Tests on a real MariaDB, each worker with a database of its own. Those of `long` take minutes and are run by `npm run test:long`. */
+function onDatabase(name: 'db' | 'long', groupOrder: number, maxWorkers: number): TestProjectConfiguration {
+  return {
+    resolve,
+    test: {
+      name,
+      environment: 'node',
+      include: [`tests/${name}/**/*.test.ts`],
+      globalSetup: ['tests/db/global.ts'],
+      setupFiles: ['tests/db/setup.ts'],
+      pool: 'forks',
+      execArgv: ['--import', 'tsx'],
+      maxWorkers,
+      sequence: { groupOrder },
+      testTimeout: 30_000,
+      hookTimeout: 60_000,
+    },
+  };
+}
 
 const inBrowser: TestProjectConfiguration = {
   resolve,
@@ -60,6 +63,6 @@ export default defineConfig({
   test: {
     allowOnly: false,
     passWithNoTests: true,
-    projects: [pure('unit', 0), pure('properties', 1), pure('cases', 2), onDatabase, inBrowser],
+    projects: [pure('unit', 0), pure('properties', 1), pure('cases', 2), onDatabase('db', 3, 2), inBrowser, onDatabase('long', 5, 1)],
   },
 });

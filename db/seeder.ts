@@ -4,7 +4,8 @@ import path from 'node:path';
 import type { Knex } from 'knex';
 import { z } from 'zod';
 
-const WORDS = './content/seed';
+/** Where the starting data are, and the words that search is made of. */
+const WORDS = ['./content/seed', './content/notes', './content/words'];
 const runRows = z.array(z.object({ file: z.string(), sources: z.string() }));
 
 /**
@@ -30,7 +31,9 @@ export async function seed(owner: Knex, folder = './db/seeds'): Promise<readonly
 /** The seed itself and all the words and starting data that seeds put in. */
 function fingerprintOf(folder: string, file: string): string {
   const hash = createHash('sha256').update(readFileSync(path.join(folder, file)));
-  for (const name of filesIn(WORDS)) hash.update(`\n${name}\n`).update(readFileSync(path.join(WORDS, name)));
+  for (const place of WORDS) {
+    for (const name of filesIn(place)) hash.update(`\n${name}\n`).update(readFileSync(path.join(place, name)));
+  }
   return hash.digest('hex');
 }
 

@@ -1,7 +1,8 @@
 import type { Contact, Sheet } from '@/lib/regions/domain/sheet';
+import { replaceSheetEntries } from './search-entries';
 import type { Trx } from './transaction';
 
-/** Rows of rules, terms, sources, authorities and accreditation bodies, drawn from an edition's document. */
+/** Rows of rules, terms, sources, authorities and accreditation bodies, drawn from an edition's document, and what search finds of it. */
 export async function insertProjection(trx: Trx, edition_number: number, sheet: Sheet): Promise<void> {
   const of = { region: sheet.code, edition_number };
   const contact = ({ name, url, role, evidence }: Contact, position: number) => ({ ...of, position, name, url, role, evidence });
@@ -15,6 +16,7 @@ export async function insertProjection(trx: Trx, edition_number: number, sheet: 
   for (const [table, rows] of tables) {
     for (let start = 0; start < rows.length; start += 200) await trx(table).insert(rows.slice(start, start + 200));
   }
+  await replaceSheetEntries(trx, edition_number, sheet);
 }
 
 const ruleColumns = (rule: Sheet['rules'][number]) => ({

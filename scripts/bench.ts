@@ -1,8 +1,9 @@
 import { benchEngine } from './bench/engine';
+import { benchSearch } from './bench/search';
 
 /* npm run bench [-- name]: measures and prints Markdown tables. Without a name, all of them. */
 
-const BENCHES: Readonly<Record<string, () => string | Promise<string>>> = { engine: benchEngine };
+const BENCHES: Readonly<Record<string, () => string | Promise<string>>> = { engine: benchEngine, search: benchSearch };
 
 const [wanted] = process.argv.slice(2);
 const chosen = Object.entries(BENCHES).filter(([name]) => wanted === undefined || name === wanted);

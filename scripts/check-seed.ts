@@ -17,7 +17,9 @@ function reportFacts(sheet: Sheet): void {
     .flatMap((pack) =>
       sheet.code === 'care'
         ? (pack.facts ?? [])
-        : (pack.regions ?? []).filter((region) => region.code.toLowerCase().replace(/^iso-iec-/, 'iso-') === sheet.code).flatMap((region) => region.facts),
+        : (pack.regions ?? [])
+            .filter((region) => region.code.toLowerCase().replace(/^iso-iec-/, 'iso-') === sheet.code)
+            .flatMap((region) => region.facts),
     )
     .map((fact) => fact.id);
   const carried = [...sheet.rules, ...sheet.terms].flatMap((item) => item.facts).concat(sheet.textFacts);

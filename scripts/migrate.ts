@@ -4,6 +4,7 @@ import { grantApplication } from '../db/grants';
 import { connectionTo, knexSettings } from '../db/knex-settings';
 import { migrate } from '../db/migrator';
 import { seed } from '../db/seeder';
+import { putDemoPeople } from '../lib/accounts/put-demo-people';
 
 const UNREACHABLE = /Access denied|Unknown database|ECONNREFUSED|ENOTFOUND|ETIMEDOUT|EHOSTUNREACH|is not allowed to connect/;
 
@@ -41,6 +42,7 @@ async function bringUpToDate(owner: Knex, application: Knex | null): Promise<voi
   if (!process.argv.includes('--seed')) return;
   const seeds = await seed(owner);
   if (seeds.length > 0) console.log(`Seeds put in: ${seeds.join(', ')}`);
+  if (process.env['FOOTRING_DEMO'] === '1') await putDemoPeople({ db: owner, now: new Date() });
 }
 
 const owner = connect(addressOf('DATABASE_OWNER_URL'), 4);

@@ -1,11 +1,12 @@
 import path from 'node:path';
 import { startDatabase } from './machine/database-server.mjs';
+import { startMailStandIn } from './machine/mail-stand-in.mjs';
 import { checkRoom, ensurePackages, roomNeeded } from './machine/packages.mjs';
 import { must, stop, stopOnSignals } from './machine/processes.mjs';
 import { MARIADB, ensurePrograms } from './machine/programs.mjs';
 import { during, say, tell } from './machine/say.mjs';
 import * as settings from './machine/settings.mjs';
-import { build, isBuilt, pagesThere, startSite, untilHealthy } from './machine/site.mjs';
+import { appEnv, build, isBuilt, pagesThere, startSite, startWorker, untilHealthy } from './machine/site.mjs';
 
 const TO_TRY = [
   ['/check', 'check a piece: choose regions, answer what matters, get the list'],
@@ -30,16 +31,19 @@ async function start() {
   if (wanted.databaseUrl === null) await ensurePrograms([MARIADB]);
   await ensurePackages();
   const { databaseUrl, ownerUrl } = wanted.databaseUrl === null ? await localDatabase(secrets) : wanted;
-  const env = { DATABASE_URL: databaseUrl, FOOTRING_SITE: wanted.site, PORT: String(wanted.port) };
+  const { mailUrl, box } = await mailPlace(wanted);
+  const env = appEnv({ ...wanted, databaseUrl, mailUrl, secret: wanted.secret ?? secrets.siteSecret });
   if (ownerUrl === null) say('DATABASE_OWNER_URL is not set: the tables stay as they are.');
   else await during('Bringing the tables up to date', () => migrate({ ...env, DATABASE_OWNER_URL: ownerUrl }));
 
   const made = { dist: '.next', record: path.join(dataFolder, 'built'), key };
   if (!isBuilt(made)) await during('Building the site', () => build({ ...made, env: { ...env, DATABASE_OWNER_URL: '' } }));
-  startSite({ ...made, ...wanted, databaseUrl, onDeath: giveUp });
+  startWorker({ env, onDeath: giveUp });
+  startSite({ ...made, ...wanted, env, onDeath: giveUp });
+  settings.noteRunning({ site: wanted.site, databaseUrl, local: wanted.databaseUrl === null });
   const local = `http://${wanted.host ?? 'localhost'}:${wanted.port}`;
   await untilHealthy(local);
-  await welcome(wanted.site, local);
+  await welcome(wanted.site, local, box);
 }
 
 async function localDatabase(secrets) {
@@ -47,6 +51,14 @@ async function localDatabase(secrets) {
     startDatabase({ folder: path.join(dataFolder, 'database'), secrets, onDeath: giveUp }),
   );
   return { databaseUrl: server.appUrl('footring'), ownerUrl: server.ownerUrl('footring') };
+}
+
+/** Where mail is handed over: the server in the settings, or a stand-in of our own with a place to read it. */
+async function mailPlace({ mailUrl, port }) {
+  if (mailUrl !== null) return { mailUrl, box: null };
+  const folder = path.join(dataFolder, 'mail');
+  const beside = port < 65_000 ? port : 3000;
+  return startMailStandIn({ folder, wantedSmtpPort: beside + 24, wantedHttpPort: beside + 25, output: 'ignore', onDeath: giveUp });
 }
 
 async function migrate(env) {
@@ -57,11 +69,12 @@ async function migrate(env) {
   });
 }
 
-async function welcome(site, local) {
+async function welcome(site, local, box) {
   const pages = await pagesThere(local, TO_TRY);
   say(`\nFootring is at ${site}`);
   if (pages.length > 0) say('\nTo try:');
   for (const [place, words] of pages) say(`  ${site}${place}  ${words}`);
+  if (box !== null) say(`\nMail stays on this machine: ${box}`);
   say('\nCtrl-C stops it.');
 }
 

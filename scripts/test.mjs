@@ -5,13 +5,13 @@ import { Trouble, duration, say, tell } from './machine/say.mjs';
 import * as settings from './machine/settings.mjs';
 import { STEPS, prepare } from './machine/test-steps.mjs';
 
-/** The steps named on the command line, or all of them. */
+/** The steps named on the command line, or all of them but the long ones. */
 function chosen(names) {
   const strange = names.filter((name) => !STEPS.some((step) => step.name === name));
   if (strange.length > 0) {
     throw new Trouble(`There is no step ${strange.join(', ')}. The steps are: ${STEPS.map(({ name }) => name).join(', ')}.`);
   }
-  return STEPS.filter(({ name }) => names.length === 0 || names.includes(name));
+  return STEPS.filter(({ name, onlyWhenNamed }) => (names.length === 0 ? onlyWhenNamed !== true : names.includes(name)));
 }
 
 /** Makes sure of all that the steps need, from a bare machine on. */

@@ -3,8 +3,13 @@ import { createHash, randomUUID } from 'node:crypto';
 import type { z } from 'zod';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import { words } from '@/lib/kernel/words';
+import { takeApiCall } from './api-limit';
+import { addressIn } from './client-address';
+import { makeCtx } from './ctx';
+import { readEnv } from './env';
 import { log } from './log';
 import { pointerTo, problemResponse, type Fault, type Problem, type ProblemKind } from './problem';
+import { retryAfterOf } from './unavailable';
 
 const LARGEST = 256 * 1024;
 const DEEPEST = 20;
@@ -94,13 +99,27 @@ const knows = (request: Request, tag: string): boolean =>
     .map((known) => known.trim().replace(/^W\//, ''))
     .some((known) => known === tag || known === '*');
 
-/** Runs a handler; what breaks is logged under an id and answered with that id alone. */
+/** Runs a handler of the public API: counts the request against its address first, then as `answering`. */
+export async function counted(request: Request, work: () => Promise<Response>): Promise<Response> {
+  return answering(async () => {
+    const taken = await takeApiCall(addressIn(request.headers, readEnv().proxies), makeCtx());
+    if (taken.ok) return work();
+    return problemResponse({ ...problem('too-many'), retryAfterS: taken.error.retryAfterS });
+  });
+}
+
+/**
+ * Runs a handler. What breaks is logged under an id and answered with that id alone; when the database was too slow or away, the
+ * answer says when to try again.
+ */
 export async function answering(work: () => Promise<Response>): Promise<Response> {
   try {
     return await work();
   } catch (error) {
     const id = randomUUID();
     log.error({ id, error });
+    const retryAfterS = retryAfterOf(error);
+    if (retryAfterS !== null) return problemResponse({ ...problem('unavailable'), retryAfterS });
     const { title, detail } = problem('broken');
     return problemResponse({ kind: 'broken', title, detail: `${detail} (${id})` });
   }

@@ -72,6 +72,8 @@ export type ActionPlan<Ctx, Input, Value, Refusal> = {
   readonly say: (refusal: Refusal) => Readonly<Record<string, string>>;
   /** Keeps a refused entry and gives the address that shows it: without script the browser's Back would break otherwise. */
   readonly keep?: (state: FormState) => Promise<string>;
+  /** Where a refusal leads that nothing in this form can mend: to sign in, to wait. Null: its words stand in the form. */
+  readonly lead?: (refusal: Refusal, state: FormState) => Promise<string | null>;
 };
 
 /** Parses a form, runs its use case and shows refusals beside what was typed. Its words come from the schema and from `say`. */
@@ -79,20 +81,30 @@ export function defineAction<Ctx, Input, Value, Refusal>(plan: ActionPlan<Ctx, I
   return guarded(async (prev, form) => {
     const values = valuesOf(form);
     const parsed = plan.input.safeParse(values);
-    if (!parsed.success) return refused(plan.keep, { prev, values, errors: errorsOf(parsed.error) });
+    const typed = { prev, values: withoutSecrets(values) };
+    if (!parsed.success) return refused(plan.keep, { ...typed, errors: errorsOf(parsed.error) });
     const result = await plan.work(await plan.context(), parsed.data);
     if (result.ok) return plan.done(result.value, parsed.data);
-    return refused(plan.keep, { prev, values, errors: plan.say(result.error) });
+    const elsewhere = await plan.lead?.(result.error, stateOf({ ...typed, errors: {} }));
+    if (typeof elsewhere === 'string') redirect(elsewhere);
+    return refused(plan.keep, { ...typed, errors: plan.say(result.error) });
   });
 }
 
 type Refused = Pick<FormState, 'values' | 'errors'> & { readonly prev: unknown };
 
-async function refused(keep: ((state: FormState) => Promise<string>) | undefined, { prev, values, errors }: Refused): Promise<FormState> {
-  const state = { key: keyOf(values), values, errors, tries: triesOf(prev) + 1 };
+const stateOf = ({ prev, values, errors }: Refused): FormState => ({ key: keyOf(values), values, errors, tries: triesOf(prev) + 1 });
+
+async function refused(keep: ((state: FormState) => Promise<string>) | undefined, given: Refused): Promise<FormState> {
+  const state = stateOf(given);
   if (keep !== undefined && !(await isScripted())) redirect(await keep(state));
   return state;
 }
+
+/** Fields that are typed anew after a refusal: they go back into no page and are kept nowhere. */
+const SECRET_FIELDS: ReadonlySet<string> = new Set(['password', 'current', 'code']);
+
+const withoutSecrets = (values: Values): Values => Object.fromEntries(Object.entries(values).filter(([name]) => !SECRET_FIELDS.has(name)));
 
 /** The state of the last try comes back from the browser, readable and changeable: only its count is read, and doubted. */
 function triesOf(prev: unknown): number {

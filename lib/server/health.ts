@@ -1,15 +1,34 @@
 import 'server-only';
 import type { Knex } from 'knex';
 import { findAnySheet } from '@/db/editions';
+import { isAnyMailLate, isAnyMailParked } from '@/db/outbox';
+import { isAnyWorkerSeen } from '@/db/workers';
 import { log } from './log';
 
-/** Whether the database answers a read of a real table; a node that only answers `SELECT 1` may still refuse every query. */
-export async function isDatabaseAlive(db: Knex): Promise<boolean> {
+export type Health = {
+  readonly database: 'ok' | 'unavailable';
+  /** Whether a worker was seen within half a minute. */
+  readonly worker: 'ok' | 'away';
+  /** `parked`: a mail waits for a steward. `late`: one has been due for ten minutes. */
+  readonly mail: 'ok' | 'late' | 'parked' | 'unknown';
+};
+
+const SEEN_MS = 30_000;
+const LATE_MS = 600_000;
+
+/** How the parts are. The database is asked for a row of a real table: a node that answers `SELECT 1` may still refuse every query. */
+export async function readHealth(db: Knex): Promise<Health> {
   try {
     await findAnySheet(db);
-    return true;
+    const worker = (await isAnyWorkerSeen(db, SEEN_MS)) ? 'ok' : 'away';
+    return { database: 'ok', worker, mail: await mailHealth(db) };
   } catch (error) {
     log.error({ error, doing: 'health' });
-    return false;
+    return { database: 'unavailable', worker: 'away', mail: 'unknown' };
   }
+}
+
+async function mailHealth(db: Knex): Promise<Health['mail']> {
+  if (await isAnyMailParked(db)) return 'parked';
+  return (await isAnyMailLate(db, LATE_MS)) ? 'late' : 'ok';
 }

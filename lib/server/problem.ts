@@ -6,7 +6,9 @@ export const PROBLEMS = {
   'too-large': 413,
   'not-json': 415,
   'not-understood': 422,
+  'too-many': 429,
   broken: 500,
+  unavailable: 503,
 } as const;
 export type ProblemKind = keyof typeof PROBLEMS;
 
@@ -17,6 +19,8 @@ export type Problem = {
   readonly title: string;
   readonly detail: string;
   readonly errors?: readonly Fault[];
+  /** Seconds after which it is worth trying again. */
+  readonly retryAfterS?: number;
 };
 
 /** JSON Pointer (RFC 6901) of a path. */
@@ -25,11 +29,10 @@ export function pointerTo(path: readonly PropertyKey[]): string {
 }
 
 /** The refusal as `application/problem+json` (RFC 9457). */
-export function problemResponse({ kind, title, detail, errors }: Problem): Response {
+export function problemResponse({ kind, title, detail, errors, retryAfterS }: Problem): Response {
   const status = PROBLEMS[kind];
   const body = { type: `/problems/${kind}`, title, status, detail, ...(errors === undefined ? {} : { errors }) };
-  return new Response(JSON.stringify(body), {
-    status,
-    headers: { 'content-type': 'application/problem+json', 'cache-control': 'no-store', 'access-control-allow-origin': '*' },
-  });
+  const headers = { 'content-type': 'application/problem+json', 'cache-control': 'no-store', 'access-control-allow-origin': '*' };
+  const later = retryAfterS === undefined ? {} : { 'retry-after': String(retryAfterS) };
+  return new Response(JSON.stringify(body), { status, headers: { ...headers, ...later } });
 }

@@ -4,6 +4,7 @@ import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import atlas from 'world-atlas/countries-110m.json';
 import numbers from '@/content/words/country-numbers.json';
+import { MapPen } from './map-pen';
 
 /** A country's outline as an SVG path, in a box of `MAP_SIZE`. `code` is null for land that ISO 3166-1 gives no code. */
 export type CountryShape = { readonly code: string | null; readonly path: string };
@@ -34,12 +35,14 @@ function draw(): readonly CountryShape[] {
   const { features } = feature(topology, topology.objects.countries);
   const codes = new Map<string, string>(Object.entries(numbers.codes));
   const projection = geoEqualEarth().fitSize([MAP_SIZE.width, MAP_SIZE.height], { type: 'Sphere' });
-  const path = geoPath(projection).digits(1);
+  const pen = new MapPen();
+  const path = geoPath(projection, pen);
   // Antarctica fills the foot of the map and sells no pots.
   return features
     .filter(({ id }) => id !== '010')
     .flatMap((country) => {
-      const line = path(country);
-      return line === null ? [] : [{ code: codes.get(String(country.id)) ?? null, path: line }];
+      path(country);
+      const line = pen.take();
+      return line === '' ? [] : [{ code: codes.get(String(country.id)) ?? null, path: line }];
     });
 }

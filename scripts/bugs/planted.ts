@@ -59,7 +59,11 @@ const LAYERS: readonly PlantedBug[] = [
   bug(
     'exception that applies but is itself silenced still silences',
     ['properties', 'check-exceptions', 'CHECK-9'],
-    edit('line-build.ts', 'nodes.push(shop.builder.not(attacker.node));', 'nodes.push(shop.builder.not((attacker as BuiltRule).when.node));'),
+    edit(
+      'line-build.ts',
+      'nodes.push(shop.builder.not(attacker.node));',
+      'nodes.push(shop.builder.not((attacker as BuiltRule).when.node));',
+    ),
   ),
   bug(
     'last layer dropped',

@@ -45,23 +45,44 @@ export async function build({ dist, record, key, env }) {
   writeFileSync(record, `${sources} ${readOr(path.join(root, dist, 'BUILD_ID')) ?? ''}`);
 }
 
-/** Starts the built site. It gets the application's account of the database, never the owner's. */
-export function startSite({ dist, port, host, site, databaseUrl, key, onDeath, output }) {
+/** What the site and its workers are told alike. Both get the application's account of the database, never the owner's. */
+export function appEnv({ port, site, databaseUrl, secret, mailUrl, demo }) {
+  return {
+    NODE_ENV: 'production',
+    PORT: String(port),
+    FOOTRING_SITE: site,
+    FOOTRING_SECRET: secret,
+    FOOTRING_MAIL_URL: mailUrl ?? '',
+    FOOTRING_DEMO: demo,
+    DATABASE_URL: databaseUrl,
+    DATABASE_OWNER_URL: '',
+  };
+}
+
+/** Starts the built site. `env` is that of `appEnv`. */
+export function startSite({ dist, port, host, env, key, onDeath, output }) {
   const listen = host === null ? [] : ['-H', host];
   const started = begin(process.execPath, [NEXT, 'start', '-p', String(port), ...listen], {
     output,
     env: {
-      NODE_ENV: 'production',
-      PORT: String(port),
-      FOOTRING_SITE: site,
+      ...env,
       FOOTRING_DIST: dist,
-      DATABASE_URL: databaseUrl,
-      DATABASE_OWNER_URL: '',
       NEXT_SERVER_ACTIONS_ENCRYPTION_KEY: key,
       NEXT_TELEMETRY_DISABLED: '1',
     },
   });
   started.onDeath = (code) => onDeath?.(`The site ended by itself (${code}).`);
+  return started;
+}
+
+/** Starts a worker: it sends mail, does jobs and tidies up. It needs some seconds to end what it has begun. */
+export function startWorker({ env, onDeath, output }) {
+  const started = begin(process.execPath, ['--import', 'tsx', 'scripts/worker.ts'], {
+    output,
+    patienceMs: 15_000,
+    env: { ...env, TSX_TSCONFIG_PATH: '.ci/tsconfig.node.json' },
+  });
+  started.onDeath = (code) => onDeath?.(`The worker ended by itself (${code}).`);
   return started;
 }
 

@@ -1,9 +1,10 @@
 import { existsSync, mkdirSync, readFileSync, readdirSync } from 'node:fs';
 import path from 'node:path';
 import { end, must, run } from './processes.mjs';
+import { startMailStandIn } from './mail-stand-in.mjs';
 import { Trouble } from './say.mjs';
 import { dataFolder, freePort, root } from './settings.mjs';
-import { build, isBuilt, startSite, untilHealthy } from './site.mjs';
+import { appEnv, build, isBuilt, startSite, startWorker, untilHealthy } from './site.mjs';
 import { startTestDatabase, testFolder } from './test-database.mjs';
 
 const DIST = '.next-test';
@@ -14,7 +15,7 @@ const node = (...args) => run(process.execPath, args, { env: cleanEnv() });
 const tool = (file, ...args) => node(path.join('node_modules', file), ...args);
 
 /** Kept byte for byte, since hashes are made of it; written for people in lines of their own length; rewritten by Next. As in `npm run format`. */
-const UNFORMATTED = ['!tests/fixtures/**', '!content/seed/**', '!**/*.md', '!tsconfig.json'];
+const UNFORMATTED = ['!tests/fixtures/**', '!content/seed/**', '!**/*.md', '!**/*.mdx', '!tsconfig.json'];
 
 /** Every step in its order: what it is called, and what it does. A house step gives its exit code, a suite counts its tests. */
 export const STEPS = [
@@ -26,6 +27,7 @@ export const STEPS = [
   },
   { name: 'types', work: () => house(tool('typescript/bin/tsc', '--noEmit', '-p', '.ci/tsconfig.node.json')) },
   { name: 'invariants', work: () => house(node('scripts/check-invariants.mjs')) },
+  { name: 'content', work: () => house(tool('tsx/dist/cli.mjs', '--tsconfig', '.ci/tsconfig.node.json', 'scripts/content-report.ts')) },
   { name: 'unit', work: () => suite('unit') },
   { name: 'properties', work: () => suite('properties') },
   { name: 'cases', work: () => suite('cases') },
@@ -39,6 +41,7 @@ export const STEPS = [
         : { passed: 0, failed: 1 },
   },
   { name: 'e2e', needs: ['database', 'browser'], work: () => onDatabase(journeys) },
+  { name: 'long', onlyWhenNamed: true, needs: ['database'], work: () => onDatabase((server) => suite('long', serverEnv(server))) },
 ];
 
 /** What the tools below lean on and a fresh checkout lacks: the types Next makes of the folders in app/. */
@@ -56,35 +59,30 @@ async function onDatabase(work) {
   return work(server);
 }
 
+/** Not a secret one: what it protects is thrown away with the database of the tests. */
+const SECRET = Buffer.from('footring tests, not a secret one').toString('base64');
+
 async function journeys(database) {
   if ((await buildSite()) !== 0) return { passed: 0, failed: 1 };
   const port = await freePort();
   const site = `http://localhost:${port}`;
-  const env = {
-    ...cleanEnv(),
-    DATABASE_URL: database.appUrl('footring'),
-    DATABASE_OWNER_URL: database.ownerUrl('footring'),
-    FOOTRING_SITE: site,
-  };
+  const output = process.stdout.fd;
+  const onDeath = (message) => process.stderr.write(`${message}\n`);
+  const mail = await startMailStandIn({ folder: path.join(testFolder(), 'mail'), output: 'ignore', onDeath });
+  const app = appEnv({ port, site, databaseUrl: database.appUrl('footring'), secret: SECRET, mailUrl: mail.mailUrl, demo: '1' });
+  // Every journey comes from one address; the limit itself is tried on a site of its own.
+  const env = { ...cleanEnv(), ...app, FOOTRING_API_PER_MINUTE: '1000000', DATABASE_OWNER_URL: database.ownerUrl('footring') };
   await must('The tables could not be made.', process.execPath, ['--import', 'tsx', 'scripts/migrate.ts', '--seed'], {
     log: path.join(dataFolder, 'migrate-test.log'),
     env: { ...env, TSX_TSCONFIG_PATH: '.ci/tsconfig.node.json' },
   });
-  const output = process.stdout.fd;
-  const running = startSite({
-    ...made,
-    port,
-    host: null,
-    site,
-    databaseUrl: env.DATABASE_URL,
-    output,
-    onDeath: (message) => process.stderr.write(`${message}\n`),
-  });
+  const forApp = { ...env, DATABASE_OWNER_URL: '' };
+  const running = [startWorker({ env: forApp, output, onDeath }), startSite({ ...made, port, host: null, env: forApp, output, onDeath })];
   try {
     await untilHealthy(site);
-    return await suite('e2e', env);
+    return await suite('e2e', { ...env, NODE_ENV: '', FOOTRING_MAILBOX: mail.box });
   } finally {
-    await end(running);
+    for (const started of [...running, mail.started]) await end(started);
   }
 }
 
@@ -141,6 +139,11 @@ function cleanEnv() {
     DATABASE_URL: '',
     DATABASE_OWNER_URL: '',
     FOOTRING_SITE: '',
+    FOOTRING_SECRET: '',
+    FOOTRING_MAIL_URL: '',
+    FOOTRING_MAIL_FROM: '',
+    FOOTRING_PROXIES: '',
+    FOOTRING_DEMO: '',
     PORT: '',
     FOOTRING_DIST: DIST,
     NEXT_TELEMETRY_DISABLED: '1',

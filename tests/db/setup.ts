@@ -48,6 +48,9 @@ async function empty(owner: Knex): Promise<void> {
 
 process.env['DATABASE_URL'] = at(inject('appUrl'), name);
 process.env['DATABASE_OWNER_URL'] = at(inject('ownerUrl'), name);
+process.env['FOOTRING_SECRET'] = Buffer.from('footring tests, not a secret one').toString('base64');
+process.env['FOOTRING_SITE'] = 'http://footring.example.test';
+process.env['FOOTRING_API_PER_MINUTE'] = '1000000';
 
 await during(inject('ownerUrl'), (owner) =>
   owner.raw('CREATE DATABASE IF NOT EXISTS ?? CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci', [name]),

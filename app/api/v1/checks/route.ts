@@ -1,13 +1,13 @@
 import { buildChecklist } from '@/lib/checks/build-checklist';
 import { checkInput } from '@/lib/checks/schema';
 import { words } from '@/lib/kernel/words';
-import { answering, jsonResponse, preflight, problem, readBody } from '@/lib/server/api';
+import { counted, jsonResponse, preflight, problem, readBody } from '@/lib/server/api';
 import { makeCtx } from '@/lib/server/ctx';
 import { problemResponse } from '@/lib/server/problem';
 
 /** Judges one piece for some places. Open to all, reads no cookie, keeps nothing unless `keep` is true. */
 export async function POST(request: Request): Promise<Response> {
-  return answering(async () => {
+  return counted(request, async () => {
     const input = await readBody(request, checkInput);
     if (!input.ok) return problemResponse(input.error);
     const checklist = await buildChecklist(makeCtx(), input.value);

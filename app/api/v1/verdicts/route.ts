@@ -2,7 +2,7 @@ import { answersInput } from '@/lib/checks/schema';
 import { words } from '@/lib/kernel/words';
 import { judgeReadings } from '@/lib/readings/judge-readings';
 import { verdictInput } from '@/lib/readings/schema';
-import { answering, jsonResponse, preflight, problem, readBody } from '@/lib/server/api';
+import { counted, jsonResponse, preflight, problem, readBody } from '@/lib/server/api';
 import { makeCtx } from '@/lib/server/ctx';
 import { problemResponse } from '@/lib/server/problem';
 
@@ -10,7 +10,7 @@ const input = verdictInput(answersInput.default({}));
 
 /** Judges a lab's figures for one piece in some places. Open to all, reads no cookie, keeps nothing. */
 export async function POST(request: Request): Promise<Response> {
-  return answering(async () => {
+  return counted(request, async () => {
     const read = await readBody(request, input);
     if (!read.ok) return problemResponse(read.error);
     const judged = await judgeReadings(makeCtx(), read.value);

@@ -1,13 +1,13 @@
 import { words } from '@/lib/kernel/words';
 import { readRule } from '@/lib/regions/read-rule';
-import { answering, jsonResponse, preflight, problem } from '@/lib/server/api';
+import { counted, jsonResponse, preflight, problem } from '@/lib/server/api';
 import { makeCtx } from '@/lib/server/ctx';
 import { problemResponse } from '@/lib/server/problem';
 
 type Context = { readonly params: Promise<{ readonly id: string }> };
 
 export async function GET(request: Request, { params }: Context): Promise<Response> {
-  return answering(async () => {
+  return counted(request, async () => {
     const { id } = await params;
     const found = await readRule(makeCtx(), id);
     if (!found.ok) return problemResponse(problem('unknown-rule', [{ pointer: '', detail: words('problems.no-rule', { id }) }]));

@@ -1,0 +1,3 @@
+import 'server-only';
+
+export { newId } from '@/db/new-id';
