@@ -26,6 +26,9 @@ export function SiteFooter({ path, theme, chooseTheme }: Props): ReactElement {
                   {words(`site.foot.${page}`)}
                 </MenuLink>
               ))}
+              <MenuLink href="/day-book" path={path}>
+                {words('day-book.title')}
+              </MenuLink>
             </ul>
           </nav>
           <ThemeChoice theme={theme} choose={chooseTheme} />

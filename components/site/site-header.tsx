@@ -1,10 +1,19 @@
 import type { ReactElement } from 'react';
+import { SiteSearch } from '@/components/search/site-search';
 import { words } from '@/lib/kernel/words';
+import { AccountMenu } from './account-menu';
 import { FootRingMark } from './foot-ring-mark';
 import { MenuLink } from './menu-link';
 
-/** Name, menu, and the way to a person: the same on every page, in the same order. */
-export function SiteHeader({ path }: { readonly path: string }): ReactElement {
+type Props = {
+  readonly path: string;
+  /** Whoever is signed in. */
+  readonly who: { readonly name: string } | null;
+  readonly signOut: (form: FormData) => Promise<void>;
+};
+
+/** Name, menu, the way to a person, and one's own account: the same on every page, in the same order. */
+export function SiteHeader({ path, who, signOut }: Props): ReactElement {
   return (
     <header className="site-head">
       <div className="page site-bar">
@@ -23,11 +32,16 @@ export function SiteHeader({ path }: { readonly path: string }): ReactElement {
             <MenuLink href="/readings" path={path}>
               {words('site.menu.readings')}
             </MenuLink>
+            <MenuLink href="/notes" path={path}>
+              {words('site.menu.notes')}
+            </MenuLink>
             <MenuLink href="/contact" path={path}>
               {words('site.menu.help')}
             </MenuLink>
           </ul>
         </nav>
+        <SiteSearch />
+        <AccountMenu path={path} who={who} signOut={signOut} />
       </div>
       <div className="page">
         <div className="site-line not-in-print" />

@@ -1,0 +1,15 @@
+import type { Metadata } from 'next';
+import type { ReactElement } from 'react';
+import { PageHeading } from '@/components/ui/page-heading';
+import { words } from '@/lib/kernel/words';
+
+export const metadata: Metadata = { title: words('accounts.signIn.byLink.sent.title'), robots: { index: false } };
+
+export default function LinkSentPage(): ReactElement {
+  return (
+    <div className="max-w-text">
+      <PageHeading takesFocus>{words('accounts.signIn.byLink.sent.title')}</PageHeading>
+      <p className="mt-4">{words('accounts.signIn.byLink.sent.lead')}</p>
+    </div>
+  );
+}
