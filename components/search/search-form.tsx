@@ -1,0 +1,51 @@
+import type { ReactElement } from 'react';
+import { Button } from '@/components/ui/button';
+import { Field, hintId } from '@/components/ui/field';
+import { SelectField } from '@/components/ui/select-field';
+import { LOCALE, words } from '@/lib/kernel/words';
+import { SEARCH_KINDS, type SearchKind } from '@/lib/search/domain/entry';
+import { SearchField } from './search-field';
+
+type Props = {
+  readonly asked: string;
+  readonly kind: SearchKind | null;
+  readonly region: string | null;
+  readonly places: readonly { readonly code: string; readonly name: string }[];
+};
+
+const BY_NAME = new Intl.Collator(LOCALE, { sensitivity: 'base' });
+
+/** Words, a kind and the reader's place, sent as a plain GET: all of it stays in the address. */
+export function SearchForm({ asked, kind, region, places }: Props): ReactElement {
+  const hint = words('search.field.hint');
+  return (
+    <search aria-label={words('search.title')}>
+      <form action="/search" method="get" className="not-in-print mt-6 flex max-w-text flex-col gap-4">
+        <Field id="q" label={words('search.field.label')} hint={hint}>
+          <SearchField id="q" asked={asked} describedBy={hintId('q')} />
+        </Field>
+        <div className="flex flex-wrap gap-4">
+          <SelectField
+            id="kind"
+            name="kind"
+            label={words('search.field.kind')}
+            none={words('search.field.allKinds')}
+            options={SEARCH_KINDS.map((value) => ({ value, label: words(`search.many.${value}`) }))}
+            chosen={kind ?? undefined}
+          />
+          <SelectField
+            id="region"
+            name="region"
+            label={words('search.field.region')}
+            none={words('search.field.allRegions')}
+            options={places.toSorted((a, b) => BY_NAME.compare(a.name, b.name)).map(({ code, name }) => ({ value: code, label: name }))}
+            chosen={region ?? undefined}
+          />
+        </div>
+        <div>
+          <Button>{words('search.field.button')}</Button>
+        </div>
+      </form>
+    </search>
+  );
+}
