@@ -8,6 +8,8 @@ import { SiteHeader } from '@/components/site/site-header';
 import { isTheme, type Theme } from '@/components/site/theme-choice';
 import { FocusOnArrival } from '@/components/ui/focus-on-arrival';
 import { words } from '@/lib/kernel/words';
+import { currentSession } from '@/lib/server/session';
+import { signOut } from './(account)/actions';
 import { chooseTheme } from './theme';
 import './styles/scripts.css';
 import './globals.css';
@@ -60,7 +62,7 @@ export default async function RootLayout({ children }: { readonly children: Reac
         <a className="skip-link" href="#content">
           {words('site.skip')}
         </a>
-        <SiteHeader path={path} />
+        <SiteHeader path={path} who={await currentSession()} signOut={signOut} />
         <main id="content" tabIndex={-1} className="page">
           {children}
         </main>

@@ -1,5 +1,7 @@
 import type { MetadataRoute } from 'next';
 import { connection } from 'next/server';
+import { listNotes } from '@/lib/notes/list-notes';
+import { listWords } from '@/lib/notes/list-words';
 import { listAddresses } from '@/lib/regions/list-addresses';
 import { makeCtx } from '@/lib/server/ctx';
 import { ownOrigin } from '@/lib/server/own-site';
@@ -9,8 +11,16 @@ const STILL = [
   '/check',
   '/regions',
   '/readings',
+  '/notes',
+  '/words',
   '/substances/pb',
   '/substances/cd',
+  '/changes',
+  '/limits',
+  '/sources',
+  '/coverage',
+  '/heard',
+  '/day-book',
   '/privacy',
   '/cautions',
   '/accessibility',
@@ -21,6 +31,12 @@ export default async function sitemap(): Promise<MetadataRoute.Sitemap> {
   // Drawn on request: the sheets are in the database, which a build has not got.
   await connection();
   const { regions, rules } = await listAddresses(makeCtx());
-  const paths = [...STILL, ...regions.map((code) => `/regions/${code}`), ...rules.map((id) => `/rules/${id}`)];
+  const paths = [
+    ...STILL,
+    ...(await listNotes()).map(({ slug }) => `/notes/${slug}`),
+    ...listWords().map(({ slug }) => `/words/${slug}`),
+    ...regions.map((code) => `/regions/${code}`),
+    ...rules.map((id) => `/rules/${id}`),
+  ];
   return paths.map((path) => ({ url: `${ownOrigin()}${path}` }));
 }

@@ -36,9 +36,17 @@ export default function HomePage(): ReactElement {
         <div className="mt-4">
           <RegionSearch />
         </div>
-        <p className="mt-3">
-          <a href="/regions">{words('home.find.all')}</a>
-        </p>
+        <ul className="mt-3 flex flex-wrap gap-x-6">
+          <li>
+            <a href="/regions">{words('home.find.all')}</a>
+          </li>
+          <li>
+            <a href="/changes">{words('library.links.changes.name')}</a>
+          </li>
+          <li>
+            <a href="/heard">{words('library.links.heard.name')}</a>
+          </li>
+        </ul>
       </section>
       <section className="mt-16" aria-labelledby="gets">
         <h2 id="gets">{words('home.gets.title')}</h2>

@@ -1,5 +1,5 @@
 import type { ReactElement } from 'react';
-import { CheckboxGroup } from '@/components/ui/checkbox-group';
+import { PlaceChoices, type PlaceChoice } from '@/components/site/place-choices';
 import { ErrorSummary } from '@/components/ui/error-summary';
 import { Field } from '@/components/ui/field';
 import { controlProps } from '@/components/ui/field';
@@ -7,18 +7,15 @@ import { PageHeading } from '@/components/ui/page-heading';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { words } from '@/lib/kernel/words';
 
-export type Place = { readonly code: string; readonly name: string; readonly line: readonly string[] };
-
 type Props = {
   readonly address: string;
-  readonly places: readonly Place[];
+  readonly places: readonly PlaceChoice[];
   readonly chosen: readonly string[];
   readonly saleOn: string;
   /** Why the form came back: no place, a bad day, or a place without a sheet. */
   readonly why: string | null;
   readonly submit: string;
   readonly act: (form: FormData) => Promise<void>;
-  readonly names: ReadonlyMap<string, string>;
 };
 
 /** What to mend, with the field it belongs to. */
@@ -31,28 +28,26 @@ function faultOf(why: string | null, first: string): { readonly id: string; read
 
 /** Where a piece is sold and when: the first page of a check, and the page to change it. */
 export function PlacesForm(props: Props): ReactElement {
-  const { address, places, chosen, saleOn, submit, act, names } = props;
+  const { address, places, chosen, saleOn, submit, act } = props;
   const fault = faultOf(props.why, 'region');
   const day = {
     label: words('checks.places.day'),
     hint: words('checks.places.dayHint'),
     error: fault?.id === 'on' ? fault.said : undefined,
   };
-  const above = (line: readonly string[]) => line.slice(0, -1).map((code) => names.get(code) ?? code);
   return (
     <form action={act} noValidate className="flex flex-col gap-6">
       {fault === null ? null : <ErrorSummary heading={words('checks.faults.heading', { count: 1 })} faults={[fault]} tries={1} />}
       <PageHeading>{words('checks.places.title')}</PageHeading>
       <p>{words('checks.places.why')}</p>
       <input type="hidden" name="key" value={address} />
-      <CheckboxGroup
+      <PlaceChoices
         id="region"
         name="region"
         legend={words('checks.places.legend')}
         hint={words('checks.places.hint')}
         error={fault?.id === 'region' ? fault.said : undefined}
-        options={places.map(({ code, name, line }) => ({ value: code, label: name, hint: above(line).join(', ') || undefined }))}
-        last={[]}
+        places={places}
         chosen={chosen}
       />
       <p className="field-hint">

@@ -17,8 +17,8 @@ export function ChangeList({ id, months }: Props): ReactElement {
       <h2 id={id}>{words(`library.changes.${id}.title`)}</h2>
       {months.length === 0 ? <p className="mt-2">{words(`library.changes.${id}.none`)}</p> : null}
       {months.map(({ month, changes }) => (
-        <section key={month} className="mt-6" aria-labelledby={`${id}-${month}`}>
-          <h3 id={`${id}-${month}`}>{sayMonth(month)}</h3>
+        <div key={month} className="mt-6">
+          <h3>{sayMonth(month)}</h3>
           <ul className="mt-2 max-w-text">
             {changes.map((change) => (
               <li key={keyOf(change)} className="border-b border-rule py-3">
@@ -29,7 +29,7 @@ export function ChangeList({ id, months }: Props): ReactElement {
               </li>
             ))}
           </ul>
-        </section>
+        </div>
       ))}
     </section>
   );
@@ -88,7 +88,7 @@ function Rules({ change: { kind, place, rules }, when }: RulesProps): ReactEleme
   return (
     <>
       <p>
-        {words.rich(`library.changes.rules.${kind}.${kind === 'look-again' ? 'past' : when}`, {
+        {words.rich(kind === 'look-again' ? 'library.changes.rules.look-again.past' : `library.changes.rules.${kind}.${when}`, {
           place: place.name,
           count,
           link: (said) => <a href={`/regions/${place.code}`}>{said}</a>,

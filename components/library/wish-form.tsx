@@ -11,7 +11,7 @@ export function WishedPlaces({ places, act }: { readonly places: readonly Wished
   return (
     <section className="mt-8 flex max-w-text flex-col gap-4" aria-labelledby="no-sheet">
       <h2 id="no-sheet">{words('library.wish.none')}</h2>
-      <p>{words('regions.list.none.meaning')}</p>
+      <p>{words('library.wish.noneText', { count: places.length })}</p>
       <ul className="flex flex-col gap-4">
         {places.map(({ code, name, count }) => (
           <li key={code}>

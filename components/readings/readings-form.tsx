@@ -1,5 +1,5 @@
 import type { ReactElement, ReactNode } from 'react';
-import { CheckboxGroup } from '@/components/ui/checkbox-group';
+import { PlaceChoices, type PlaceChoice } from '@/components/site/place-choices';
 import { Disclosure } from '@/components/ui/disclosure';
 import { ErrorSummary } from '@/components/ui/error-summary';
 import { controlProps, Field } from '@/components/ui/field';
@@ -13,8 +13,6 @@ import { ProfileFields } from './profile-fields';
 import { RowTable } from './row-table';
 import { sheetFaultWords } from './sheet-fault-words';
 import { ConditionFields, ExtractFields } from './test-fields';
-
-export type PlaceChoice = { readonly code: string; readonly name: string; readonly line: readonly string[] };
 
 type Props = {
   /** The address the entry will be kept under. */
@@ -100,7 +98,6 @@ function Part({ id, children }: PartProps): ReactElement {
 }
 
 function PlaceFields({ view, places }: Pick<Props, 'view' | 'places'>): ReactElement {
-  const names = new Map(places.map(({ code, name }) => [code, name]));
   const day = {
     label: words('readings-page.places.day'),
     hint: words('readings-page.places.dayHint'),
@@ -108,18 +105,13 @@ function PlaceFields({ view, places }: Pick<Props, 'view' | 'places'>): ReactEle
   };
   return (
     <>
-      <CheckboxGroup
+      <PlaceChoices
         id="region"
         name="region"
         legend={words('readings-page.places.legend')}
         hint={words('readings-page.places.hint')}
         error={errorAt(view, 'region')}
-        options={places.map(({ code, name, line }) => ({
-          value: code,
-          label: name,
-          hint: aboveWords(line, names),
-        }))}
-        last={[]}
+        places={places}
         chosen={view.entry.regions}
       />
       <Field id="on" {...day}>
@@ -128,12 +120,6 @@ function PlaceFields({ view, places }: Pick<Props, 'view' | 'places'>): ReactEle
     </>
   );
 }
-
-const aboveWords = (line: readonly string[], names: ReadonlyMap<string, string>): string | undefined =>
-  line
-    .slice(0, -1)
-    .map((code) => names.get(code) ?? code)
-    .join(', ') || undefined;
 
 function isFurtherUsed({ fields, entry, faults }: FormView): boolean {
   const isNamed = faults.some(({ place }) => place === 'further');

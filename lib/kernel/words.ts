@@ -3,20 +3,24 @@ import accounts from '@/content/messages/en/accounts.json';
 import bench from '@/content/messages/en/bench.json';
 import broken from '@/content/messages/en/broken.json';
 import checks from '@/content/messages/en/checks.json';
+import dayBook from '@/content/messages/en/day-book.json';
 import editions from '@/content/messages/en/editions.json';
 import coverage from '@/content/messages/en/coverage.json';
 import heard from '@/content/messages/en/heard.json';
 import home from '@/content/messages/en/home.json';
 import library from '@/content/messages/en/library.json';
 import measures from '@/content/messages/en/measures.json';
+import notes from '@/content/messages/en/notes.json';
 import pieces from '@/content/messages/en/pieces.json';
 import problems from '@/content/messages/en/problems.json';
 import questions from '@/content/messages/en/questions.json';
 import readings from '@/content/messages/en/readings.json';
 import readingsPage from '@/content/messages/en/readings-page.json';
 import regions from '@/content/messages/en/regions.json';
+import search from '@/content/messages/en/search.json';
 import sheetChecks from '@/content/messages/en/sheet-checks.json';
 import site from '@/content/messages/en/site.json';
+import stewards from '@/content/messages/en/stewards.json';
 
 /** The one language there is so far. British, so that dates read "31 December". */
 export const LOCALE = 'en-GB';
@@ -27,20 +31,24 @@ export const MESSAGES = {
   bench,
   broken,
   checks,
+  'day-book': dayBook,
   editions,
   coverage,
   heard,
   home,
   library,
   measures,
+  notes,
   pieces,
   problems,
   questions,
   readings,
   'readings-page': readingsPage,
   regions,
+  search,
   'sheet-checks': sheetChecks,
   site,
+  stewards,
 };
 
 /** `words('home.title')`. A key that does not exist is no valid program; a message that cannot be formatted throws. */

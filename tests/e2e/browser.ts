@@ -70,10 +70,18 @@ async function answerQuestion(page: Page, id: string, answer: string | readonly 
   await page.locator(`input[name="${id}.${currency}"]`).fill(amount);
 }
 
+/** Unfolds the part of the world a place stands in and ticks it. */
+export async function choosePlace(page: Page, place: string): Promise<void> {
+  const box = page.locator(`input[name="region"][value="${place}"]`);
+  const part = page.locator('details', { has: box });
+  if ((await part.getAttribute('open')) === null) await part.locator('summary').click();
+  await box.check();
+}
+
 /** Begins a check for these places and answers until nothing is left to ask. Ends on the review page. */
 export async function checkPiece(page: Page, places: readonly string[], said: Said): Promise<readonly string[]> {
   await page.goto('/check');
-  for (const place of places) await page.locator(`input[name="region"][value="${place}"]`).check();
+  for (const place of places) await choosePlace(page, place);
   await page.getByRole('button', { name: 'Begin with the questions' }).click();
   await page.waitForURL(/\/check\/[^/]+\/use/);
   const asked: string[] = [];

@@ -1,7 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import { checkBriefly, MUG, openBrowser, SITE, visit } from './browser';
+import { checkBriefly, choosePlace, MUG, openBrowser, SITE, visit } from './browser';
 
 let browser: Browser;
 let pages: readonly string[] = [];
@@ -9,7 +9,7 @@ let pages: readonly string[] = [];
 /** Figures of one mug held against two places, kept at an address. */
 async function readingsOf(page: Page): Promise<string> {
   await page.goto('/readings');
-  for (const place of ['eu', 'jp']) await page.locator(`input[name="region"][value="${place}"]`).check();
+  for (const place of ['eu', 'jp']) await choosePlace(page, place);
   await page.locator('select[name="use"]').selectOption('food');
   await page.locator('[name="readings.value.1"]').fill('0.31');
   await page.getByRole('button', { name: 'Hold against the limits', exact: true }).first().click();
@@ -32,11 +32,26 @@ async function routes(): Promise<readonly string[]> {
   await page.getByRole('button', { name: 'Carry on' }).click();
   await page.waitForURL(/look=1/);
   const readings = await readingsOf(page);
+  await page.goto('/sources?region=dk');
+  const source = (await page.locator('main a[href^="/sources/"]').first().getAttribute('href')) ?? '';
   await page.context().close();
   return [
     '/',
     '/regions',
     '/regions?q=zzzz',
+    '/search',
+    '/search?q=lead&region=dk',
+    '/search?q=qqqqzzzz',
+    '/regions?q=egypt',
+    '/regions/wishes',
+    '/regions/wishes?why=too-many',
+    '/changes',
+    '/changes?region=us-ca',
+    '/sources',
+    '/sources?region=jp&q=act',
+    source,
+    '/limits',
+    '/limits?region=dk&region=us-ca&region=jp',
     '/regions/dk',
     '/regions/eu/on/2020-01-01',
     '/rules/ca-nonfood-warning',
@@ -57,9 +72,19 @@ async function routes(): Promise<readonly string[]> {
     '/substances/pb',
     '/privacy',
     '/cautions',
+    '/heard',
+    '/coverage',
+    '/notes',
+    '/notes/cones-and-the-1000-degree-line',
+    '/notes/leach-test',
+    '/notes/other-colourants',
+    '/words',
+    '/words/crazing',
     '/accessibility',
     '/contact',
+    '/day-book',
     '/regions/dk/editions',
+    '/regions/dk/editions/compare',
     '/regions/jp/editions/1',
     '/problems/not-understood',
     '/broken',

@@ -161,6 +161,8 @@ test('J1 a whole check can be done with the keyboard alone', async () => {
     }
     throw new Error(`${until} cannot be reached with ${key}`);
   };
+  await press('Tab', 'details:has(input[value="dk"]) > summary');
+  await page.keyboard.press('Enter');
   await press('Tab', 'input[name="region"][value="dk"]');
   await page.keyboard.press('Space');
   await press('Tab', 'button.button-primary');

@@ -1,6 +1,6 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { openBrowser, visit } from './browser';
+import { choosePlace, openBrowser, visit } from './browser';
 
 let browser: Browser;
 beforeAll(async () => {
@@ -20,7 +20,7 @@ async function press(page: Page, name: string): Promise<void> {
 }
 
 async function describeMug(page: Page): Promise<void> {
-  for (const place of ['eu', 'us', 'ca']) await page.locator(`input[name="region"][value="${place}"]`).check();
+  for (const place of ['eu', 'us', 'ca']) await choosePlace(page, place);
   for (const [id, answer] of [
     ['use', 'food'],
     ['form', 'mug'],

@@ -26,7 +26,6 @@ export default async function CheckPage({ searchParams }: Props): Promise<ReactE
         why={asked.why}
         submit={words('checks.places.begin')}
         act={begin}
-        names={new Map(places.map(({ code, name }) => [code, name]))}
       />
       <p className="mt-6">{words('checks.lead')}</p>
     </div>

@@ -19,7 +19,7 @@ export default async function PlacesPage({ params, searchParams }: Props): Promi
   const ctx = makeCtx();
   const read = id.success ? await readCheck(ctx, id.data) : null;
   if (read?.ok !== true) notFound();
-  const { check, names } = read.value;
+  const { check } = read.value;
   const asked = placesAsked(await searchParams);
   const back = asked.why !== null;
   return (
@@ -32,7 +32,6 @@ export default async function PlacesPage({ params, searchParams }: Props): Promi
         why={asked.why}
         submit={words('checks.places.change')}
         act={place}
-        names={names}
       />
     </div>
   );
