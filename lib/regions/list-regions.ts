@@ -6,8 +6,7 @@ import type { Ctx } from '@/lib/server/ctx';
 import { readEdition } from '@/lib/server/sheets';
 import { regionLine } from './domain/line';
 import type { LimitsKnown, ListedRegion } from './domain/listed-region';
-import { isInForce } from './domain/rule';
-import type { Sheet } from './domain/sheet';
+import { isInForce, type Rule } from './domain/rule';
 
 export type { LimitsKnown, ListedRegion } from './domain/listed-region';
 
@@ -24,18 +23,19 @@ export async function listRegions(ctx: Ctx): Promise<readonly ListedRegion[]> {
   const editions = await Promise.all(heads.map(({ region, number }) => readEdition(ctx.db, region, number)));
   const sheets = new Map(editions.flatMap((edition) => (edition === null ? [] : [[edition.region, edition]])));
   return withSheet.flatMap(({ code, name, kind }) => {
-    const line = regionLine(memberships, code, today).layers;
-    const layers = line.flatMap((layer) => sheets.get(layer)?.sheet ?? []);
+    const { layers: line, except } = regionLine(memberships, code, today);
+    const notTaken = new Set(except.map(({ rule }) => rule));
+    const rules = line.flatMap((layer) => sheets.get(layer)?.sheet.rules ?? []).filter(({ id }) => !notTaken.has(id));
     const number = sheets.get(code)?.number;
-    return number === undefined ? [] : [{ code, name, kind, line, edition: number, limits: limitsOf(layers, today) }];
+    return number === undefined ? [] : [{ code, name, kind, line, edition: number, limits: limitsOf(rules, today) }];
   });
 }
 
-function limitsOf(layers: readonly Sheet[], today: ReturnType<typeof calendarDateOf>): LimitsKnown {
-  const states = layers
-    .flatMap(({ rules }) => rules)
-    .filter((rule) => isInForce(rule, today) && rule.strength !== 'note')
-    .flatMap(({ payload }) => (payload.topic === 'limit' ? [payload.amount.evidence] : []));
-  if (states.includes('read')) return 'read';
-  return states.length > 0 ? 'to-confirm' : 'none';
+/** A figure from memory is never more than a note, and a place that has one is not without limits: it is to be confirmed. */
+function limitsOf(rules: readonly Rule[], today: ReturnType<typeof calendarDateOf>): LimitsKnown {
+  const limits = rules.flatMap((rule) =>
+    rule.payload.topic === 'limit' && isInForce(rule, today) ? [{ strength: rule.strength, known: rule.payload.amount.evidence }] : [],
+  );
+  if (limits.some(({ strength, known }) => known === 'read' && strength !== 'note')) return 'read';
+  return limits.some(({ known }) => known === 'memory') ? 'to-confirm' : 'none';
 }

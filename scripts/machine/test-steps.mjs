@@ -115,7 +115,7 @@ async function suite(project, env = {}) {
     '-c',
     '.ci/vitest.config.ts',
     '--project',
-    project,
+    `${project}*`, // `e2e-alone` comes after `e2e`
     '--reporter=default',
     '--reporter=json',
     `--outputFile.json=${report}`,

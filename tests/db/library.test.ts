@@ -3,6 +3,7 @@ import { db } from '@/db/connection';
 import { compareLimits } from '@/lib/regions/compare-limits';
 import { findRegions } from '@/lib/regions/find-regions';
 import { listChanges } from '@/lib/regions/list-changes';
+import { listRegions } from '@/lib/regions/list-regions';
 import { listSources } from '@/lib/regions/list-sources';
 import { readSource } from '@/lib/regions/read-source';
 import type { Ctx } from '@/lib/server/ctx';
@@ -24,6 +25,14 @@ async function queriesOf(work: () => Promise<unknown>): Promise<number> {
   db.removeListener('query', count);
   return sent;
 }
+
+test('REG-41 a place whose figures are from memory is to be confirmed; one that does not take over the limits above it has none of them', async () => {
+  const known = new Map((await listRegions(ctx)).map(({ code, limits }) => [code, limits]));
+  const some = ['eu', 'se', 'us-wa', 'cn', 'gb-wls', 'iso-6486', 'cl', 'no'];
+  expect(some.map((code) => `${code} ${known.get(code) ?? 'missing'}`)).toEqual([
+    ...['eu read', 'se read', 'us-wa read', 'cn to-confirm', 'gb-wls to-confirm', 'iso-6486 to-confirm', 'cl none', 'no none'],
+  ]);
+});
 
 describe('REG-43 the finder over all places', () => {
   const found = async (asked: string) => {

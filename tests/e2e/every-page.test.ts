@@ -1,136 +1,22 @@
-import AxeBuilder from '@axe-core/playwright';
-import type { Browser, Page } from 'playwright-core';
+import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import { checkBriefly, choosePlace, MUG, openBrowser, SITE, visit } from './browser';
+import { openBrowser, SITE, visit } from './browser';
+import { faultsOf, routes } from './every-route';
 
 let browser: Browser;
 let pages: readonly string[] = [];
 
-/** Figures of one mug held against two places, kept at an address. */
-async function readingsOf(page: Page): Promise<string> {
-  await page.goto('/readings');
-  for (const place of ['eu', 'jp']) await choosePlace(page, place);
-  await page.locator('select[name="use"]').selectOption('food');
-  await page.locator('[name="readings.value.1"]').fill('0.31');
-  await page.getByRole('button', { name: 'Hold against the limits', exact: true }).first().click();
-  await page.waitForURL(/\/readings\/[A-Za-z0-9_-]{22}/);
-  return new URL(page.url()).pathname;
-}
-
-/** Every kind of page there is, with a check and a copy that exist. */
-async function routes(): Promise<readonly string[]> {
-  const page = await (await visit(browser)).newPage();
-  await checkBriefly(page, ['dk', 'us-ca'], MUG);
-  await page.getByRole('button', { name: 'Show my checklist' }).click();
-  await page.waitForURL(/\/check\/[A-Za-z0-9_-]{22}$/);
-  const check = new URL(page.url()).pathname;
-  await page.getByRole('button', { name: 'Keep a dated copy' }).click();
-  await page.waitForURL(/\/copies\//);
-  const copy = new URL(page.url()).pathname;
-  await page.goto(`${check}/depth-mm`);
-  await page.locator('input[name="depth-mm"]').fill('deep');
-  await page.getByRole('button', { name: 'Carry on' }).click();
-  await page.waitForURL(/look=1/);
-  const readings = await readingsOf(page);
-  await page.goto('/sources?region=dk');
-  const source = (await page.locator('main a[href^="/sources/"]').first().getAttribute('href')) ?? '';
-  await page.context().close();
-  return [
-    '/',
-    '/regions',
-    '/regions?q=zzzz',
-    '/search',
-    '/search?q=lead&region=dk',
-    '/search?q=qqqqzzzz',
-    '/regions?q=egypt',
-    '/regions/wishes',
-    '/regions/wishes?why=too-many',
-    '/changes',
-    '/changes?region=us-ca',
-    '/sources',
-    '/sources?region=jp&q=act',
-    source,
-    '/limits',
-    '/limits?region=dk&region=us-ca&region=jp',
-    '/regions/dk',
-    '/regions/eu/on/2020-01-01',
-    '/rules/ca-nonfood-warning',
-    '/check',
-    '/check?why=none',
-    `${check}/use`,
-    `${check}/form`,
-    `${check}/depth-mm?look=1`,
-    `${check}/turnover-a-year`,
-    `${check}/seller-region`,
-    `${check}/places`,
-    `${check}/review`,
-    check,
-    `${check}?place=dk`,
-    copy,
-    '/readings',
-    readings,
-    '/substances/pb',
-    '/privacy',
-    '/cautions',
-    '/heard',
-    '/coverage',
-    '/notes',
-    '/notes/cones-and-the-1000-degree-line',
-    '/notes/leach-test',
-    '/notes/other-colourants',
-    '/words',
-    '/words/crazing',
-    '/accessibility',
-    '/contact',
-    '/day-book',
-    '/regions/dk/editions',
-    '/regions/dk/editions/compare',
-    '/regions/jp/editions/1',
-    '/problems/not-understood',
-    '/broken',
-    '/nope',
-  ];
-}
-
 beforeAll(async () => {
   browser = await openBrowser();
-  pages = await routes();
+  pages = await routes(browser);
 });
 afterAll(async () => {
   await browser.close();
 });
 
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-
-async function widerThanScreen(page: Page): Promise<number> {
-  return page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
-}
-
-/** Rules whose outcome the colours decide; all others come out the same in both themes. */
-const COLOUR_RULES = ['color-contrast', 'link-in-text-block'];
-
-test.each([320, 1280])(
-  'W1 at %i px, light and dark: axe finds nothing on any page, and none scrolls sideways',
-  async (width) => {
-    const page = await (await visit(browser, { width })).newPage();
-    const faults: unknown[] = [];
-    const look = async (path: string, theme: string, axe: AxeBuilder): Promise<void> => {
-      const { violations } = await axe.analyze();
-      faults.push(...violations.map(({ id, nodes }) => ({ path, theme, id, at: nodes.slice(0, 3).map(({ target }) => target.join(' ')) })));
-    };
-    for (const path of pages) {
-      await page.emulateMedia({ colorScheme: 'light' });
-      await page.goto(path);
-      await look(path, 'light', new AxeBuilder({ page }).withTags(TAGS));
-      await page.emulateMedia({ colorScheme: 'dark' });
-      await look(path, 'dark', new AxeBuilder({ page }).withRules(COLOUR_RULES));
-      const wider = await widerThanScreen(page);
-      if (wider > 0) faults.push({ path, wider });
-    }
-    expect(faults).toEqual([]);
-  },
-  600_000,
-);
+test('W1 at 320 px, light and dark: axe finds nothing on any page, and none scrolls sideways', async () => {
+  expect(await faultsOf(browser, pages, { width: 320, colours: ['light', 'dark'] })).toEqual([]);
+}, 900_000);
 
 test('S09 every page carries a fresh nonce, runs no foreign script, and no policy is broken', async () => {
   const page = await (await visit(browser)).newPage();
