@@ -42,36 +42,27 @@ function onDatabase(name: 'db' | 'long', groupOrder: number, maxWorkers: number)
   };
 }
 
-/** These count rows before and after, and so can have nobody else at work on the site. */
-const ALONE = ['tests/e2e/protected-paths.test.ts', 'tests/e2e/stewards.test.ts'];
-
-/** Journeys on one site, in a real browser. */
-function inBrowser(name: 'e2e' | 'e2e-alone', groupOrder: number, maxWorkers: number): TestProjectConfiguration {
-  return {
-    resolve,
-    test: {
-      name,
-      environment: 'node',
-      ...(name === 'e2e' ? { include: ['tests/e2e/**/*.test.{ts,tsx}'], exclude: ALONE } : { include: ALONE }),
-      globalSetup: ['tests/e2e/global.ts'],
-      pool: 'forks',
-      execArgv: ['--import', 'tsx'],
-      maxWorkers,
-      sequence: { groupOrder },
-      testTimeout: 120_000,
-      hookTimeout: 120_000,
-    },
-  };
-}
+const inBrowser: TestProjectConfiguration = {
+  resolve,
+  test: {
+    name: 'e2e',
+    environment: 'node',
+    include: ['tests/e2e/**/*.test.{ts,tsx}'],
+    globalSetup: ['tests/e2e/global.ts'],
+    pool: 'forks',
+    execArgv: ['--import', 'tsx'],
+    maxWorkers: 1,
+    sequence: { groupOrder: 4 },
+    testTimeout: 120_000,
+    hookTimeout: 120_000,
+  },
+};
 
 export default defineConfig({
   root,
   test: {
     allowOnly: false,
     passWithNoTests: true,
-    projects: [
-      ...[pure('unit', 0), pure('properties', 1), pure('cases', 2), onDatabase('db', 3, 2)],
-      ...[inBrowser('e2e', 4, 2), inBrowser('e2e-alone', 5, 1), onDatabase('long', 6, 1)],
-    ],
+    projects: [pure('unit', 0), pure('properties', 1), pure('cases', 2), onDatabase('db', 3, 2), inBrowser, onDatabase('long', 5, 1)],
   },
 });

@@ -40,7 +40,8 @@ export const STEPS = [
         ? house(run(process.execPath, ['.ci/budgets.mjs'], { env: { ...cleanEnv(), FOOTRING_DIST: DIST } }))
         : { passed: 0, failed: 1 },
   },
-  { name: 'e2e', needs: ['database', 'browser'], work: () => onDatabase(journeys) },
+  { name: 'e2e', needs: ['database', 'browser'], work: () => onDatabase((server) => journeys(server)) },
+  { name: 'wide', onlyWhenNamed: true, needs: ['database', 'browser'], work: () => onDatabase((server) => journeys(server, EVERY_WIDTH)) },
   { name: 'long', onlyWhenNamed: true, needs: ['database'], work: () => onDatabase((server) => suite('long', serverEnv(server))) },
 ];
 
@@ -62,7 +63,10 @@ async function onDatabase(work) {
 /** Not a secret one: what it protects is thrown away with the database of the tests. */
 const SECRET = Buffer.from('footring tests, not a secret one').toString('base64');
 
-async function journeys(database) {
+/** The journeys look at pages at 320 px; at every width there is, they take too long to wait for at each change. */
+const EVERY_WIDTH = { FOOTRING_EVERY_WIDTH: 'yes' };
+
+async function journeys(database, more = {}) {
   if ((await buildSite()) !== 0) return { passed: 0, failed: 1 };
   const port = await freePort();
   const site = `http://localhost:${port}`;
@@ -80,7 +84,7 @@ async function journeys(database) {
   const running = [startWorker({ env: forApp, output, onDeath }), startSite({ ...made, port, host: null, env: forApp, output, onDeath })];
   try {
     await untilHealthy(site);
-    return await suite('e2e', { ...env, NODE_ENV: '', FOOTRING_MAILBOX: mail.box });
+    return await suite('e2e', { ...env, ...more, NODE_ENV: '', FOOTRING_MAILBOX: mail.box });
   } finally {
     for (const started of [...running, mail.started]) await end(started);
   }
@@ -115,7 +119,7 @@ async function suite(project, env = {}) {
     '-c',
     '.ci/vitest.config.ts',
     '--project',
-    `${project}*`, // `e2e-alone` comes after `e2e`
+    project,
     '--reporter=default',
     '--reporter=json',
     `--outputFile.json=${report}`,

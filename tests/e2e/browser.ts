@@ -3,6 +3,9 @@ import { chromium, type Browser, type BrowserContext, type Page } from 'playwrig
 /** Address of the built site under test. */
 export const SITE = process.env['FOOTRING_SITE'] ?? 'http://localhost:3000';
 
+/** Widths in CSS pixels at which axe looks at pages: the narrowest each time, all of them in `npm run test:long`. */
+export const WIDTHS: readonly number[] = process.env['FOOTRING_EVERY_WIDTH'] === 'yes' ? [320, 1280] : [320];
+
 const FLAGS = [
   '--no-sandbox',
   '--disable-gpu',

@@ -1,6 +1,6 @@
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import { openBrowser, SITE, visit } from './browser';
+import { openBrowser, SITE, visit, WIDTHS } from './browser';
 import { faultsOf, routes } from './every-route';
 
 let browser: Browser;
@@ -14,9 +14,13 @@ afterAll(async () => {
   await browser.close();
 });
 
-test('W1 at 320 px, light and dark: axe finds nothing on any page, and none scrolls sideways', async () => {
-  expect(await faultsOf(browser, pages, { width: 320, colours: ['light', 'dark'] })).toEqual([]);
-}, 900_000);
+test.each(WIDTHS)(
+  'W1 at %i px, light and dark: axe finds nothing on any page, and none scrolls sideways',
+  async (width) => {
+    expect(await faultsOf(browser, pages, { width, colours: ['light', 'dark'] })).toEqual([]);
+  },
+  900_000,
+);
 
 test('S09 every page carries a fresh nonce, runs no foreign script, and no policy is broken', async () => {
   const page = await (await visit(browser)).newPage();

@@ -1,7 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { openBrowser, SITE, visit } from './browser';
+import { openBrowser, SITE, visit, WIDTHS } from './browser';
 
 let browser: Browser;
 beforeAll(async () => {
@@ -92,7 +92,7 @@ describe('J9 with script', () => {
   });
 });
 
-test.each([320, 1280])('J9 at %i px axe finds nothing on search pages, and none scrolls sideways', async (width) => {
+test.each(WIDTHS)('J9 at %i px axe finds nothing on search pages, and none scrolls sideways', async (width) => {
   for (const dark of [false, true]) {
     const page = await (await visit(browser, { width, dark })).newPage();
     for (const path of ['/search', '/search?q=lead', '/search?q=declaration&region=dk&kind=rule', '/search?q=qqqq']) {
