@@ -59,7 +59,7 @@ function Categories({ row: { categories } }: RowProps): ReactElement {
   return (
     <>
       {categories.map(({ id, name, region }) => (
-        <a key={id} className="block" href={`/regions/${region}#term-${id}`}>
+        <a key={id} className="block py-1" href={`/regions/${region}#term-${id}`}>
           {name}
         </a>
       ))}

@@ -105,7 +105,7 @@ const AMOUNTS: readonly PlantedBug[] = [
   bug(
     'litres read as millilitres',
     ['properties', 'check-cut-points', 'CHECK-14'],
-    edit('lib/kernel/quantity.ts', "L: ['mL', '1000']", "L: ['mL', '1']"),
+    edit('lib/kernel/quantity.ts', "L: ['mL', 9]", "L: ['mL', 6]"),
   ),
   bug(
     'currency ignored',
