@@ -1,16 +1,14 @@
 import type { ReactElement } from 'react';
 import { Button } from '@/components/ui/button';
 import { Field, controlProps } from '@/components/ui/field';
-import { SelectField } from '@/components/ui/select-field';
-import { LOCALE, words } from '@/lib/kernel/words';
+import { PlaceSelect, type Place } from '@/components/regions/place-select';
+import { words } from '@/lib/kernel/words';
 
 type Props = {
   readonly asked: string;
-  readonly places: readonly { readonly code: string; readonly name: string }[];
+  readonly places: readonly Place[];
   readonly chosen: string | undefined;
 };
-
-const BY_NAME = new Intl.Collator(LOCALE, { sensitivity: 'base' });
 
 /** Words and a place, sent as a plain GET. */
 export function SourceSearch({ asked, places, chosen }: Props): ReactElement {
@@ -29,14 +27,7 @@ export function SourceSearch({ asked, places, chosen }: Props): ReactElement {
             {...controlProps('q', said)}
           />
         </Field>
-        <SelectField
-          id="region"
-          name="region"
-          label={words('library.filter.label')}
-          none={words('library.filter.all')}
-          options={places.toSorted((a, b) => BY_NAME.compare(a.name, b.name)).map(({ code, name }) => ({ value: code, label: name }))}
-          chosen={chosen}
-        />
+        <PlaceSelect label={words('library.filter.label')} none={words('library.filter.all')} places={places} chosen={chosen} />
         <div>
           <Button kind="plain">{words('library.sources.search.button')}</Button>
         </div>

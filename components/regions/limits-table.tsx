@@ -6,6 +6,7 @@ import { sayDecision, sayPart, saySubstance, sayUnit } from '@/lib/regions/domai
 import type { LimitRow } from '@/lib/regions/domain/limit-rows';
 import type { SheetNames } from '@/lib/regions/domain/sheet-names';
 import { MemoryMark, StrengthLine } from './strength-line';
+import { TermLinks } from './term-links';
 
 type Props = {
   readonly rows: readonly LimitRow[];
@@ -34,7 +35,7 @@ export function LimitsTable({ rows, place, names }: Props): ReactElement {
         cells: {
           rule: <RuleCell row={row} own={place.code} names={names} />,
           substance: <a href={`/substances/${row.limit.substance.toLowerCase()}`}>{saySubstance(row.limit.substance)}</a>,
-          category: <Categories row={row} />,
+          category: <TermLinks categories={row.categories} />,
           figure: <Figure row={row} />,
           decision: <DecisionCell row={row} />,
           word: <StrengthLine strength={row.rule.strength} standing={row.rule.standing} />,
@@ -64,19 +65,6 @@ function RuleCell({
           {words('regions.limits.silenced', { rules: sayList(silencedBy.map(({ title }) => title)) })}
         </span>
       )}
-    </>
-  );
-}
-
-function Categories({ row: { categories } }: RowProps): ReactElement {
-  if (categories.length === 0) return <>{words('regions.limits.all')}</>;
-  return (
-    <>
-      {categories.map(({ id, name, region }) => (
-        <a key={id} className="block py-1" href={`/regions/${region}#term-${id}`}>
-          {name}
-        </a>
-      ))}
     </>
   );
 }

@@ -7,6 +7,7 @@ import type { LimitRow } from '@/lib/regions/domain/limit-rows';
 import type { SubstanceLimits } from '@/lib/regions/domain/substance-limits';
 import { SourceTitle } from './source-details';
 import { MemoryMark, StrengthLine } from './strength-line';
+import { TermLinks } from './term-links';
 
 type Props = { readonly limits: SubstanceLimits; readonly name: string };
 
@@ -36,7 +37,7 @@ export function SubstanceLimitsTable({ limits: { places, above, notFound }, name
               id: row.rule.id,
               cells: {
                 place: <a href={`/regions/${place.code}`}>{place.name}</a>,
-                category: <Categories row={row} />,
+                category: <TermLinks categories={row.categories} />,
                 figure: <Figure row={row} />,
                 decision: sayDecision(row.limit.decision).join(' '),
                 word: <StrengthLine strength={row.rule.strength} standing={row.rule.standing} evidence={row.limit.decision.evidence} />,
@@ -53,19 +54,6 @@ export function SubstanceLimitsTable({ limits: { places, above, notFound }, name
 }
 
 type RowProps = { readonly row: LimitRow };
-
-function Categories({ row: { categories } }: RowProps): ReactElement {
-  if (categories.length === 0) return <>{words('regions.limits.all')}</>;
-  return (
-    <>
-      {categories.map(({ id, name, region }) => (
-        <a key={id} className="block py-1" href={`/regions/${region}#term-${id}`}>
-          {name}
-        </a>
-      ))}
-    </>
-  );
-}
 
 /** The figure, and whether it was read in its source. */
 function Figure({ row: { limit } }: RowProps): ReactElement {

@@ -1,8 +1,9 @@
 import type { ReactElement } from 'react';
+import { PlaceSelect, type Place } from '@/components/regions/place-select';
 import { Button } from '@/components/ui/button';
 import { Field, hintId } from '@/components/ui/field';
 import { SelectField } from '@/components/ui/select-field';
-import { LOCALE, words } from '@/lib/kernel/words';
+import { words } from '@/lib/kernel/words';
 import { SEARCH_KINDS, type SearchKind } from '@/lib/search/domain/entry';
 import { SearchField } from './search-field';
 
@@ -10,10 +11,8 @@ type Props = {
   readonly asked: string;
   readonly kind: SearchKind | null;
   readonly region: string | null;
-  readonly places: readonly { readonly code: string; readonly name: string }[];
+  readonly places: readonly Place[];
 };
-
-const BY_NAME = new Intl.Collator(LOCALE, { sensitivity: 'base' });
 
 /** Words, a kind and the reader's place, sent as a plain GET: all of it stays in the address. */
 export function SearchForm({ asked, kind, region, places }: Props): ReactElement {
@@ -33,12 +32,10 @@ export function SearchForm({ asked, kind, region, places }: Props): ReactElement
             options={SEARCH_KINDS.map((value) => ({ value, label: words(`search.many.${value}`) }))}
             chosen={kind ?? undefined}
           />
-          <SelectField
-            id="region"
-            name="region"
+          <PlaceSelect
             label={words('search.field.region')}
             none={words('search.field.allRegions')}
-            options={places.toSorted((a, b) => BY_NAME.compare(a.name, b.name)).map(({ code, name }) => ({ value: code, label: name }))}
+            places={places}
             chosen={region ?? undefined}
           />
         </div>
