@@ -1,5 +1,7 @@
+import { Secret, TOTP } from 'otpauth';
 import { findAccountByEmail, insertAccount } from '@/db/accounts';
 import { db } from '@/db/connection';
+import { putRegion } from '@/db/regions';
 import { insertSession } from '@/db/sessions';
 import { inTransaction } from '@/db/transaction';
 import type { AccountRole, Actor } from '@/lib/access/domain/actor';
@@ -86,3 +88,18 @@ export async function emptyTables(): Promise<void> {
     await db(table).del();
   }
 }
+
+/** Milliseconds. */
+export const DAY = 86_400_000;
+export const later = (ms: number): Date => new Date(NOW.getTime() + ms);
+
+/** What an authenticator holds, and the code it shows at an instant. */
+export const SECRET = 'GEZDGNBVGY3TQOJQGEZDGNBVGY3TQOJQ';
+export const codeAt = (now: Date): string => new TOTP({ secret: Secret.fromBase32(SECRET) }).generate({ timestamp: now.getTime() });
+
+/** A place that makers may ask to write about. */
+export const aPlace = () =>
+  inTransaction(db, async (trx) => {
+    await putRegion(trx, { code: 'dk', name: 'Denmark', kind: 'country' });
+    return ok(null);
+  });
