@@ -1,7 +1,9 @@
 import type { ReactElement, ReactNode } from 'react';
 import { Caution } from '@/components/checks/caution';
 import { DefinitionList } from '@/components/ui/definition-list';
+import { Panel } from '@/components/ui/panel';
 import type { RegionChecklist } from '@/lib/checks/domain/checklist';
+import { limitsOfList } from '@/lib/checks/domain/limits-known';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import { sayDate, sayList } from '@/lib/kernel/say';
 import { words } from '@/lib/kernel/words';
@@ -22,6 +24,9 @@ export function ReportBanner({ regions, on, placeNames, children }: Props): Reac
       <div className="mt-4">
         <Caution seenOn={firstSeen(regions) ?? on} authority={names.length === 0 ? undefined : sayList([...new Set(names)])} />
       </div>
+      {regions.map((region) => (
+        <LimitsUnknown key={region.code} region={region} name={placeNames.get(region.code) ?? region.code} />
+      ))}
       <div className="mt-4">
         <DefinitionList
           entries={regions.map((region) => ({
@@ -36,6 +41,25 @@ export function ReportBanner({ regions, on, placeNames, children }: Props): Reac
       </p>
       {children}
     </>
+  );
+}
+
+/** Says that a list is silent on limits because we do not know them, not because there are none. */
+function LimitsUnknown({ region, name }: { readonly region: RegionChecklist; readonly name: string }): ReactElement | null {
+  const known = limitsOfList(region.rules);
+  if (known === 'some') return null;
+  const [authority] = region.authorities;
+  return (
+    <div className="mt-4">
+      <Panel colour="ash">
+        <p>
+          {words.rich(`checks.result.limits.${known}`, { place: name, strong: (said) => <strong className="font-strong">{said}</strong> })}{' '}
+          {authority === undefined
+            ? words('checks.result.limits.askThem')
+            : words('checks.result.limits.ask', { authority: authority.name })}
+        </p>
+      </Panel>
+    </div>
   );
 }
 
