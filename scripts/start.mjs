@@ -12,6 +12,8 @@ const TO_TRY = [
   ['/check', 'check a piece: choose regions, answer what matters, get the list'],
   ['/regions', 'region sheets: what each place asks, with its sources'],
   ['/readings', 'readings: hold a lab’s figures against the limits of every place'],
+  ['/notes', 'studio notes: crazing, raw insides, leach tests, each figure with its source'],
+  ['/sign-in', 'accounts: with no database of your own, that page shows one to try for every role'],
   ['/api/v1/regions', 'the same as data'],
 ];
 const { dataFolder } = settings;
