@@ -2,21 +2,24 @@ import type { Knex } from 'knex';
 import { canonicalJson } from '@/lib/kernel/canonical-json';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import type { CheckId } from '@/lib/checks/domain/ids';
+import type { Answers } from '@/lib/checks/domain/knowledge';
 import { checkRow, type Check } from './rows/check-row';
 import type { Trx } from './transaction';
 
-const COLUMNS = ['id', 'regions', 'sale_on', 'answers', 'declined', 'entry', 'shown', 'kept', 'touched_at'] as const;
+const COLUMNS = ['id', 'regions', 'sale_on', 'answers', 'declined', 'entry', 'from_note', 'shown', 'kept', 'touched_at'] as const;
 
 export type NewCheck = {
   readonly id: CheckId;
   readonly regions: readonly string[];
   readonly saleOn: CalendarDate | null;
+  readonly fromNote: Answers;
   readonly at: Date;
 };
 
 /** Begins a check; one that stands at this address already stays as it is, so that a form sent twice begins one check. */
-export async function insertCheck(trx: Trx, { id, regions, saleOn, at }: NewCheck): Promise<void> {
-  const row = { id, regions: canonicalJson(regions), sale_on: saleOn, answers: '{}', declined: '[]', begun_at: at, touched_at: at };
+export async function insertCheck(trx: Trx, { id, regions, saleOn, fromNote, at }: NewCheck): Promise<void> {
+  const begun = { begun_at: at, touched_at: at, from_note: Object.keys(fromNote).length === 0 ? null : canonicalJson(fromNote) };
+  const row = { id, regions: canonicalJson(regions), sale_on: saleOn, answers: '{}', declined: '[]', ...begun };
   await trx('checks').insert(row).onConflict('id').ignore();
 }
 
@@ -41,7 +44,7 @@ const alive = (db: Knex, id: CheckId, since: Date) =>
     .select(...COLUMNS);
 
 /** Writes what was said back. The caller holds the lock. */
-export async function updateCheck(trx: Trx, check: Omit<Check, 'kept' | 'touchedAt'>, at: Date): Promise<void> {
+export async function updateCheck(trx: Trx, check: Omit<Check, 'fromNote' | 'kept' | 'touchedAt'>, at: Date): Promise<void> {
   await trx('checks')
     .where({ id: check.id })
     .update({

@@ -83,7 +83,8 @@ function OnePlace({ report, region, line, index }: OneProps): ReactElement {
       <PlaceChecklist region={region} view={view} timeline={report.explanation.timeline} />
       <section className="mt-8" aria-labelledby="sources">
         <h2 id="sources">{words('checks.result.sources')}</h2>
-        <CitedList list={cited.list} />
+        <p className="mb-4">{words('checks.result.sourcesText')}</p>
+        <CitedList list={cited.list} brief />
       </section>
     </>
   );

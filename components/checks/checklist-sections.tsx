@@ -14,6 +14,8 @@ const OPEN = ['sources-disagree', 'applies', 'treat-as-applying', 'not-settled']
 /** The lines for one place, in the order they are read: what applies, what to treat as applying, what is open, the rest folded. */
 export function ChecklistSections({ region, view }: Props): ReactElement {
   const sections = sectionsOf(region.rules);
+  const { notes } = sections;
+  const folded = notes.filter((rule) => !isCaution(rule) && !isUnreadLaw(rule));
   const show = (rules: readonly JudgedRule[]) => <ByTopic rules={rules} view={view} />;
   return (
     <>
@@ -24,7 +26,9 @@ export function ChecklistSections({ region, view }: Props): ReactElement {
         </Section>
       ))}
       <Section name="notes" view={view}>
-        <Folded count={sections.notes.length} summary="notesThat" rules={sections.notes} view={view} />
+        <Unfolded lead="cautions" rules={notes.filter(isCaution)} view={view} />
+        <Unfolded lead="fromMemory" rules={notes.filter(isUnreadLaw)} view={view} />
+        <Folded count={folded.length} summary="notesThat" rules={folded} view={view} />
         <Folded count={sections['open-notes'].length} summary="notesOpen" rules={sections['open-notes']} view={view} />
       </Section>
       {sections.said.length === 0 ? null : (
@@ -36,6 +40,29 @@ export function ChecklistSections({ region, view }: Props): ReactElement {
       <Section name="does-not-apply" view={view}>
         <Folded count={sections['does-not-apply'].length} summary="doesNot" rules={sections['does-not-apply']} view={view} />
       </Section>
+    </>
+  );
+}
+
+/** Advice on what a surface or a firing like this one's can do: a maker must meet it without unfolding anything. */
+const isCaution = ({ region, topic }: JudgedRule): boolean => region === 'care' && (topic === 'surface' || topic === 'firing');
+
+/** What may be a duty, though nobody read it: no must by itself, and not to be missed either. */
+const isUnreadLaw = ({ standing, evidence }: JudgedRule): boolean => standing === 'law' && evidence === 'memory';
+
+type UnfoldedProps = Pick<FoldedProps, 'rules' | 'view'> & { readonly lead: 'cautions' | 'fromMemory' };
+
+/** Notes that nobody should have to unfold. */
+function Unfolded({ lead, rules, view }: UnfoldedProps): ReactElement | null {
+  if (rules.length === 0) return null;
+  return (
+    <>
+      <p className="mt-4">{words(`checks.result.${lead}`)}</p>
+      <ul className="mb-4">
+        {rules.map((judged) => (
+          <Short key={judged.id} part="notesThat" judged={judged} view={view} />
+        ))}
+      </ul>
     </>
   );
 }

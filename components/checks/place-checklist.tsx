@@ -5,6 +5,7 @@ import { sectionsOf } from '@/lib/checks/domain/sections';
 import type { TimelineStep } from '@/lib/checks/domain/timeline';
 import { sayDate } from '@/lib/kernel/say';
 import { words } from '@/lib/kernel/words';
+import { namesTerm } from '@/lib/regions/domain/term-uses';
 import { ChecklistSections } from './checklist-sections';
 import { ChangeList } from './changes-panel';
 import type { ListView } from './list-view';
@@ -20,7 +21,7 @@ export function PlaceChecklist({ region, view, timeline }: Props): ReactElement 
       <ChecklistSections region={region} view={view} />
       <Coming region={region} timeline={timeline} />
       <Classes region={region} view={view} />
-      <NotInherited region={region} />
+      <NotInherited region={region} view={view} />
       <WhomToAsk {...region} placeNames={view.placeNames} />
     </>
   );
@@ -84,8 +85,15 @@ function Timeline({ steps }: { readonly steps: readonly TimelineStep[] }): React
   );
 }
 
-function Classes({ region: { categories, code }, view }: Omit<Props, 'timeline'>): ReactElement | null {
-  const possible = categories.filter((category) => category.possible);
+/** Whether some limit of this list speaks of that kind of ware: one whose limits were not taken over decides nothing here. */
+const limitsTurnOn = (term: string, rules: RegionChecklist['rules'], { told }: ListView): boolean =>
+  rules.some(({ id }) => {
+    const rule = told.get(id);
+    return rule?.topic === 'limit' && namesTerm(rule.when, term);
+  });
+
+function Classes({ region: { categories, rules, code }, view }: Omit<Props, 'timeline'>): ReactElement | null {
+  const possible = categories.filter(({ term, possible: canBe }) => canBe && limitsTurnOn(term, rules, view));
   if (possible.length === 0) return null;
   const id = `${code}-categories`;
   return (
@@ -103,16 +111,27 @@ function Classes({ region: { categories, code }, view }: Omit<Props, 'timeline'>
   );
 }
 
-function NotInherited({ region: { notInherited, code } }: Pick<Props, 'region'>): ReactElement | null {
+/** Rules of a layer above that do not reach the place, those left out for one reason together. */
+function NotInherited({ region: { notInherited, code }, view }: Omit<Props, 'timeline'>): ReactElement | null {
   if (notInherited.length === 0) return null;
   const id = `${code}-not-inherited`;
+  const reasons = [...new Set(notInherited.map(({ why }) => why))];
   return (
     <section className="mt-8" aria-labelledby={id}>
       <h2 id={id}>{words('checks.result.notInherited')}</h2>
       <ul className="list-disc ps-6">
-        {notInherited.map(({ rule, why }) => (
-          <li key={rule}>
-            <a href={`/rules/${rule}`}>{rule}</a>: {why}
+        {reasons.map((reason) => (
+          <li key={reason} className="py-1">
+            {reason}
+            <ul className="ps-6">
+              {notInherited
+                .filter(({ why }) => why === reason)
+                .map(({ rule }) => (
+                  <li key={rule}>
+                    <a href={`/rules/${rule}`}>{view.told.get(rule)?.title ?? rule}</a>
+                  </li>
+                ))}
+            </ul>
           </li>
         ))}
       </ul>

@@ -5,7 +5,9 @@ import { Field } from '@/components/ui/field';
 import { controlProps } from '@/components/ui/field';
 import { PageHeading } from '@/components/ui/page-heading';
 import { SubmitButton } from '@/components/ui/submit-button';
+import { noteAnswerText, type NoteAnswer } from '@/lib/checks/domain/note-answer';
 import { words } from '@/lib/kernel/words';
+import { answerWords, questionWords } from './question-words';
 
 type Props = {
   readonly address: string;
@@ -14,6 +16,8 @@ type Props = {
   readonly saleOn: string;
   /** Why the form came back: no place, a bad day, or a place without a sheet. */
   readonly why: string | null;
+  /** The answer of the note this check begins from. */
+  readonly fromNote?: NoteAnswer | null;
   readonly submit: string;
   readonly act: (form: FormData) => Promise<void>;
 };
@@ -28,7 +32,7 @@ function faultOf(why: string | null, first: string): { readonly id: string; read
 
 /** Where a piece is sold and when: the first page of a check, and the page to change it. */
 export function PlacesForm(props: Props): ReactElement {
-  const { address, places, chosen, saleOn, submit, act } = props;
+  const { address, places, chosen, saleOn, submit, act, fromNote = null } = props;
   const fault = faultOf(props.why, 'region');
   const day = {
     label: words('checks.places.day'),
@@ -40,6 +44,7 @@ export function PlacesForm(props: Props): ReactElement {
       {fault === null ? null : <ErrorSummary heading={words('checks.faults.heading', { count: 1 })} faults={[fault]} tries={1} />}
       <PageHeading>{words('checks.places.title')}</PageHeading>
       <p>{words('checks.places.why')}</p>
+      {fromNote === null ? null : <FromNote answer={fromNote} />}
       <input type="hidden" name="key" value={address} />
       <PlaceChoices
         id="region"
@@ -60,5 +65,19 @@ export function PlacesForm(props: Props): ReactElement {
         <SubmitButton busy={words('checks.places.busy')}>{submit}</SubmitButton>
       </div>
     </form>
+  );
+}
+
+const NO_NAMES: ReadonlyMap<string, string> = new Map();
+
+/** What of a note will stand in its field when the question comes. */
+function FromNote({ answer: { question, value } }: { readonly answer: NoteAnswer }): ReactElement {
+  const answer = answerWords(question, value, NO_NAMES);
+  return (
+    <div className="panel panel-celadon">
+      <p>{words('checks.places.fromNote', { question: questionWords(question.id, 'short'), answer })}</p>
+      <p>{words('checks.places.fromNoteChange')}</p>
+      <input type="hidden" name="with" value={noteAnswerText({ question, value })} />
+    </div>
   );
 }

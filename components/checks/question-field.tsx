@@ -13,14 +13,17 @@ import { optionWords, questionWords, unitShort } from './question-words';
 
 export type PlaceOption = { readonly value: string; readonly label: string };
 
+/** Where an answer comes from that is filled in before the maker said so: from the form of the piece, or from a studio note. */
+export type FilledBy = 'form' | 'note';
+
 type Props = {
   readonly question: Question;
   /** The page asks this question alone: its title is the heading already. */
   readonly alone: boolean;
   readonly fields: Fields;
   readonly error?: string | undefined;
-  /** The choice stands there because of the form, not because the maker said so. */
-  readonly suggested?: true | undefined;
+  /** What stands there is not of the maker's saying. */
+  readonly filledBy?: FilledBy | undefined;
   readonly currencies: readonly string[];
   readonly places: readonly PlaceOption[];
   readonly tries: number;
@@ -30,10 +33,10 @@ const unknown = () => ({ value: 'unknown', label: words('checks.question.unknown
 
 /** The control of one question, with what was said or typed before, and "I don't know yet" last. */
 export function QuestionField(props: Props): ReactElement {
-  const { question, fields, alone, error, suggested } = props;
+  const { question, fields, alone, error, filledBy } = props;
   const legend = questionWords(question.id, 'title');
   const group = { id: question.id, name: question.id, legend, error, ...(alone ? { legendIsHeading: true as const } : {}) };
-  const hint = hintOf(question, alone, suggested);
+  const hint = hintOf(question, alone, filledBy);
   const chosen = fields[question.id] ?? [];
   switch (question.kind) {
     case 'yesno':
@@ -69,8 +72,8 @@ export function QuestionField(props: Props): ReactElement {
   }
 }
 
-const hintOf = ({ id }: Question, alone: boolean, suggested: true | undefined): string | undefined => {
-  if (suggested === true) return words('checks.question.suggested');
+const hintOf = ({ id }: Question, alone: boolean, filledBy: FilledBy | undefined): string | undefined => {
+  if (filledBy !== undefined) return words(`checks.question.filledBy.${filledBy}`);
   return alone ? undefined : questionWords(id, 'why');
 };
 
@@ -85,13 +88,21 @@ function Unknown({ question, fields }: Pick<Props, 'question' | 'fields'>): Reac
   return <Choice id={name} type="checkbox" name={name} option={option} chosen={(fields[name] ?? []).length > 0} apart />;
 }
 
-function LongChoice({ question, fields, error, tries, options }: Props & { readonly options: readonly PlaceOption[] }): ReactElement {
+function LongChoice({
+  question,
+  fields,
+  error,
+  tries,
+  options,
+  filledBy,
+}: Props & { readonly options: readonly PlaceOption[] }): ReactElement {
   return (
     <Together question={question} fields={fields}>
       <SelectField
         id={question.id}
         name={question.id}
         label={questionWords(question.id, 'title')}
+        hint={filledBy === undefined ? undefined : words(`checks.question.filledBy.${filledBy}`)}
         error={error}
         none={words('checks.question.choose')}
         options={options}
@@ -102,14 +113,14 @@ function LongChoice({ question, fields, error, tries, options }: Props & { reado
   );
 }
 
-function Amount({ question, fields, error, unit }: Props & { readonly unit: string }): ReactElement {
+function Amount({ question, fields, error, unit, filledBy }: Props & { readonly unit: string }): ReactElement {
   return (
     <Together question={question} fields={fields}>
       <AmountField
         id={question.id}
         name={question.id}
         label={questionWords(question.id, 'title')}
-        hint={questionWords(question.id, 'example')}
+        hint={filledBy === undefined ? questionWords(question.id, 'example') : words(`checks.question.filledBy.${filledBy}`)}
         error={error}
         unit={unitShort(unit)}
         unitSpoken={questionWords(question.id, 'unit')}

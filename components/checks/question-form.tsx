@@ -7,7 +7,7 @@ import type { EntryFault, Fields } from '@/lib/checks/domain/entry';
 import type { Question } from '@/lib/checks/domain/questions';
 import { words, wordsAt } from '@/lib/kernel/words';
 import { faultWords } from './fault-words';
-import { QuestionField, type PlaceOption } from './question-field';
+import { QuestionField, type FilledBy, type PlaceOption } from './question-field';
 import { questionWords } from './question-words';
 
 export type QuestionPage = {
@@ -17,6 +17,7 @@ export type QuestionPage = {
   readonly fields: Fields;
   readonly faults: readonly EntryFault[];
   readonly suggested: readonly string[];
+  readonly fromNote: readonly string[];
   readonly settled: boolean;
   /** Names of the places the questions matter for. */
   readonly matters: readonly string[];
@@ -80,6 +81,11 @@ function Notes({ page }: Pick<Props, 'page'>): ReactElement {
   );
 }
 
+function filledBy({ suggested, fromNote }: QuestionPage, id: string): FilledBy | undefined {
+  if (fromNote.includes(id)) return 'note';
+  return suggested.includes(id) ? 'form' : undefined;
+}
+
 type AskedProps = { readonly question: Question; readonly page: QuestionPage; readonly alone: boolean };
 
 function Asked({ question, page, alone }: AskedProps): ReactElement {
@@ -92,7 +98,7 @@ function Asked({ question, page, alone }: AskedProps): ReactElement {
         alone={alone}
         fields={page.fields}
         error={fault === undefined ? undefined : faultWords(fault)}
-        suggested={page.suggested.includes(question.id) ? true : undefined}
+        filledBy={filledBy(page, question.id)}
         currencies={page.currencies[question.id] ?? []}
         places={page.places}
         tries={page.faults.length}

@@ -21,8 +21,8 @@ export function TraceList({ trace, names }: { readonly trace: Trace; readonly na
 function ToldList({ told }: { readonly told: readonly Told[] }): ReactElement {
   return (
     <ul className="list-disc ps-6">
-      {told.map(({ text, parts }) => (
-        <li key={text}>
+      {told.map(({ text, parts }, place) => (
+        <li key={place}>
           {text}
           {parts.length === 0 ? null : <ToldList told={parts} />}
         </li>

@@ -33,8 +33,14 @@ function Contacts({
     <ul className="mt-2 list-disc ps-6">
       {contacts.map(({ name, url, role, region, evidence }) => (
         <li key={`${region}-${name}`} className="keep-together py-1">
-          {url === null ? <bdi>{name}</bdi> : <a href={url}>{name}</a>}
-          {url === null ? null : <span className="only-print"> ({url})</span>} – {role}
+          {url === null ? (
+            <bdi>{name}</bdi>
+          ) : (
+            <a href={url} className="address-in-print">
+              {name}
+            </a>
+          )}{' '}
+          – {role}
           <span className="block font-sans text-small text-umber">
             {placeNames.get(region) ?? region}
             {url === null ? `, ${words('checks.result.noAddress')}` : null}

@@ -15,6 +15,8 @@ export type Check = Said & {
   readonly regions: readonly string[];
   readonly saleOn: CalendarDate | null;
   readonly entry: KeptEntry | null;
+  /** Answers of the note it was begun from: filled in where they are asked for, and nothing more. */
+  readonly fromNote: Answers;
   /** What the checklist last shown rested on, and the one before it. */
   readonly shown: { readonly now: Said; readonly before: Said | null } | null;
   readonly kept: boolean;
@@ -33,6 +35,7 @@ export const checkRow = z
     answers: json,
     declined: json,
     entry: json.nullable(),
+    from_note: json.nullable(),
     shown: json.nullable(),
     kept: z.number(),
     touched_at: z.date(),
@@ -44,6 +47,7 @@ export const checkRow = z
     answers: row.answers as Answers,
     declined: row.declined as readonly string[],
     entry: row.entry as KeptEntry | null,
+    fromNote: (row.from_note ?? {}) as Answers,
     shown: row.shown as Check['shown'],
     kept: row.kept !== 0,
     touchedAt: row.touched_at,

@@ -20,6 +20,8 @@ export type ReadQuestionPage = {
   readonly faults: readonly EntryFault[];
   /** Questions whose field is filled in from the form, not by the maker. */
   readonly suggested: readonly string[];
+  /** Questions whose field is filled in from the note the check was begun from. */
+  readonly fromNote: readonly string[];
   /** No rule turns on any of these questions now. */
   readonly settled: boolean;
   /** Codes of the places for which the question asked matters. */
@@ -60,19 +62,25 @@ function entryOf(
   check: Check,
   questions: readonly Question[],
   { question, look }: { readonly question: Question; readonly look: boolean },
-): Pick<ReadQuestionPage, 'fields' | 'faults' | 'suggested'> {
+): Pick<ReadQuestionPage, 'fields' | 'faults' | 'suggested' | 'fromNote'> {
   if (look && check.entry?.question === question.id) {
     const read = readEntry(
       questions.map(({ id }) => id),
       check.entry.fields,
     );
-    return { fields: check.entry.fields, faults: read.ok ? [] : read.error, suggested: [] };
+    return { fields: check.entry.fields, faults: read.ok ? [] : read.error, suggested: [], fromNote: [] };
   }
-  const suggested = suggestionsFor(questions, check);
+  const open = questions.filter(({ id }) => !(id in check.answers) && !check.declined.includes(id));
+  const noted = open.filter(({ id }) => id in check.fromNote);
+  const suggested = suggestionsFor(
+    open.filter((one) => !noted.includes(one)),
+    check,
+  );
   return {
-    fields: { ...suggested, ...fieldsOfSaid(questions, check.answers, check.declined) },
+    fields: { ...suggested, ...fieldsOfSaid(noted, check.fromNote, []), ...fieldsOfSaid(questions, check.answers, check.declined) },
     faults: [],
     suggested: Object.keys(suggested),
+    fromNote: noted.map(({ id }) => id),
   };
 }
 
@@ -88,10 +96,10 @@ function questionBefore(asked: Question, shown: readonly Question[], said: reado
   return earlier.at(-1)?.id ?? null;
 }
 
-function suggestionsFor(questions: readonly Question[], { answers, declined }: Check): Fields {
+function suggestionsFor(open: readonly Question[], { answers }: Check): Fields {
   return Object.fromEntries(
-    questions.flatMap(({ id }): readonly (readonly [string, readonly string[]])[] => {
-      const suggestion = id in answers || declined.includes(id) ? null : suggestedBy(answers['form'], id);
+    open.flatMap(({ id }): readonly (readonly [string, readonly string[]])[] => {
+      const suggestion = suggestedBy(answers['form'], id);
       return suggestion === null ? [] : [[id, [suggestion ? 'yes' : 'no']]];
     }),
   );

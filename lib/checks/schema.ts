@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { calendarDate, regionCode } from '@/lib/kernel/shapes';
 import type { DatedCopy } from './domain/dated-copy';
 import type { Answers } from './domain/knowledge';
+import { readNoteAnswer } from './domain/note-answer';
 import { QUESTIONS, type Question } from './domain/questions';
 import type { CheckId, CopyHash } from './domain/ids';
 
@@ -91,8 +92,17 @@ const fields = z
 
 const saleOn = z.union([z.literal('').transform(() => null), calendarDate]).nullable();
 
+/** The answer of a note, as an address or a form carries it: "crazed:yes". What is no such answer is null, and fills in nothing. */
+export const noteAnswer = z
+  .string()
+  .max(80)
+  .transform(readNoteAnswer)
+  .nullish()
+  .transform((answer) => answer ?? null)
+  .catch(null);
+
 /** The form that begins a check, or that changes the places and the day of one. */
-export const beginInput = z.object({ key: checkId, regions: z.array(regionCode).max(12), saleOn });
+export const beginInput = z.object({ key: checkId, regions: z.array(regionCode).max(12), saleOn, fromNote: noteAnswer });
 export type BeginInput = z.output<typeof beginInput>;
 
 /** One page of questions as sent. */

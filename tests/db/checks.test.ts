@@ -95,6 +95,59 @@ test('CHECK-46 changing the places keeps every answer', async () => {
   expect((await checkNow()).check).toMatchObject({ regions: ['us-ca', 'jp'], saleOn: '2027-03-01', answers: { use: 'food' } });
 });
 
+const beginFrom = (fromNote: unknown) => beginCheck(today, beginInput.parse({ key: ID, regions: ['dk'], saleOn: '', fromNote }));
+
+async function shownFor(id: string) {
+  const question = findQuestion(id);
+  if (question === null) throw new Error('no such question');
+  const page = await readQuestionPage(today, { id: ID, question, look: false });
+  if (!page.ok) throw new Error('The check is gone');
+  const { fields, fromNote, suggested } = page.value;
+  return { fields, fromNote, suggested };
+}
+
+test.each([
+  ['crazed:yes', 'crazed', ['yes']],
+  ['absorption-percent:3', 'absorption-percent', ['3']],
+  ['channel:market-stall', 'channel', ['market-stall']],
+  ['colourants:copper', 'colourants', ['copper']],
+])('CHECK-51 the answer of a note (%s) is filled in and marked, and counts once it is sent', async (fromNote, id, filled) => {
+  await beginFrom(fromNote);
+  expect((await checkNow()).check.answers).toEqual({});
+  expect(await shownFor(id)).toEqual({ fields: { [id]: filled }, fromNote: [id], suggested: [] });
+  await say(id, { [id]: filled });
+  expect(Object.keys((await checkNow()).check.answers)).toEqual([id]);
+  expect((await shownFor(id)).fromNote).toEqual([]);
+});
+
+test('CHECK-51 what the maker says in its place stands, and a note’s answer goes before what the form suggests', async () => {
+  await beginFrom('holds-liquid:no');
+  await say('form', { form: ['mug'] });
+  expect(await shownFor('holds-liquid')).toEqual({ fields: { 'holds-liquid': ['no'] }, fromNote: ['holds-liquid'], suggested: [] });
+  await say('holds-liquid', { 'holds-liquid': ['yes'] });
+  expect(await shownFor('holds-liquid')).toEqual({ fields: { 'holds-liquid': ['yes'] }, fromNote: [], suggested: [] });
+});
+
+test('CHECK-51 what is no answer of a note fills in nothing and stops nobody', async () => {
+  const others = [
+    'crazed:maybe',
+    'nothing:yes',
+    'crazed',
+    'crazed:yes:no',
+    'seller-region:dk',
+    'depth-mm:-1',
+    'x'.repeat(500),
+    '__proto__:yes',
+    '',
+    7,
+  ];
+  for (const other of others) {
+    await db('checks').del();
+    expect([other, await beginFrom(other)]).toEqual([other, { ok: true, value: { id: ID } }]);
+    expect((await checkNow()).check.fromNote).toEqual({});
+  }
+});
+
 test('CHECK-47 turnover in one currency leaves the other currency open without asking for ever', async () => {
   await begin(['dk', 'us-ca']);
   const asked = ['turnover-a-year'];

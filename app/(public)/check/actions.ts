@@ -62,9 +62,10 @@ const whyOf = (refusal: BeginRefusal): string => (refusal.kind === 'no-region' ?
 
 /** What was chosen goes back in the address, so that a refused form keeps it without script. */
 function refusedPlaces(form: FormData, why: string): string {
-  const { regions, saleOn } = placesOf(form);
+  const { regions, saleOn, fromNote } = placesOf(form);
   const back = new URLSearchParams({ why });
   for (const region of regions.slice(0, 40)) back.append('region', region.slice(0, 20));
   if (saleOn !== null) back.set('on', saleOn.slice(0, 20));
+  if (fromNote !== null) back.set('with', fromNote.slice(0, 80));
   return back.toString();
 }

@@ -1,8 +1,21 @@
 const texts = (form: FormData, name: string): string[] => form.getAll(name).filter((value) => typeof value === 'string');
 
+export type PlacesSent = {
+  readonly key: string | null;
+  readonly regions: string[];
+  readonly saleOn: string | null;
+  /** The answer of a note, "crazed:yes". */
+  readonly fromNote: string | null;
+};
+
 /** The form of places and day, as it was sent. */
-export function placesOf(form: FormData): { readonly key: string | null; readonly regions: string[]; readonly saleOn: string | null } {
-  return { key: texts(form, 'key')[0] ?? null, regions: texts(form, 'region'), saleOn: texts(form, 'on')[0]?.trim() ?? null };
+export function placesOf(form: FormData): PlacesSent {
+  return {
+    key: texts(form, 'key')[0] ?? null,
+    regions: texts(form, 'region'),
+    saleOn: texts(form, 'on')[0]?.trim() ?? null,
+    fromNote: texts(form, 'with')[0] ?? null,
+  };
 }
 
 /** A page of questions as it was sent. Next's own fields stay out. */

@@ -5,6 +5,7 @@ import { words } from '@/lib/kernel/words';
 import { listRegions } from '@/lib/regions/list-regions';
 import { makeCtx } from '@/lib/server/ctx';
 import { newAddress } from '@/lib/server/new-address';
+import { noteAnswer } from '@/lib/checks/schema';
 import { begin } from './actions';
 import { placesAsked, type PlacesQuery } from './places-query';
 
@@ -24,6 +25,7 @@ export default async function CheckPage({ searchParams }: Props): Promise<ReactE
         chosen={asked.chosen}
         saleOn={asked.on}
         why={asked.why}
+        fromNote={noteAnswer.parse(asked.fromNote)}
         submit={words('checks.places.begin')}
         act={begin}
       />

@@ -1,9 +1,9 @@
 import { expect, test } from 'vitest';
 import allowed from '@/content/words/allowed.json';
 import sources from '@/content/notes/fact-sources.json';
-import { answerOf } from '@/components/notes/check-step';
 import { DRAWINGS } from '@/components/notes/note-drawing';
 import { drawingWords } from '@/components/notes/drawing-frame';
+import { answerInNote } from '@/lib/checks/domain/note-answer';
 import { findQuestion } from '@/lib/checks/domain/steps';
 import { readFrontMatter } from '@/lib/notes/domain/front-matter';
 import { checksIn, citedIn, drawingsIn, headingsIn, linkedNotes, NOTE_TOPICS, termsIn } from '@/lib/notes/domain/note';
@@ -127,7 +127,7 @@ test('NOTE-5 every rule, note, word, drawing and answer a note names is there', 
     ...drawingsIn(body).flatMap((id) => (DRAWINGS.includes(id) ? [] : [`${slug}: drawing ${id}`])),
     ...checksIn(body).flatMap(({ question, answer }) => {
       const found = findQuestion(question);
-      return found !== null && answerOf(found, answer) !== null ? [] : [`${slug}: ${question} = ${answer}`];
+      return found !== null && answerInNote(found, answer) !== null ? [] : [`${slug}: ${question} = ${answer}`];
     }),
   ]);
   expect(lost).toEqual([]);
