@@ -30,13 +30,14 @@ const STILL = [
 export default async function sitemap(): Promise<MetadataRoute.Sitemap> {
   // Drawn on request: the sheets are in the database, which a build has not got.
   await connection();
-  const { regions, rules } = await listAddresses(makeCtx());
+  const { regions, rules, terms } = await listAddresses(makeCtx());
   const paths = [
     ...STILL,
     ...(await listNotes()).map(({ slug }) => `/notes/${slug}`),
     ...listWords().map(({ slug }) => `/words/${slug}`),
     ...regions.map((code) => `/regions/${code}`),
     ...rules.map((id) => `/rules/${id}`),
+    ...terms.map((id) => `/terms/${id}`),
   ];
   return paths.map((path) => ({ url: `${ownOrigin()}${path}` }));
 }

@@ -26,7 +26,10 @@ export type CandidateQuery = {
   readonly most: number;
 };
 
-/** Entries that the database finds by their words, the likeliest first. */
+/**
+ * Entries that the database finds by their words, the likeliest first. Its full text hands them over in that order by itself; asked for the
+ * order as well, it would read the row of everything it found before it gives the first.
+ */
 export async function findCandidates(db: Knex, { words, where, kinds, most }: CandidateQuery): Promise<readonly Candidate[]> {
   const rows: unknown[] = await db('search_entries')
     .whereRaw('match(??) against (? in boolean mode)', [where, words])
@@ -34,9 +37,8 @@ export async function findCandidates(db: Knex, { words, where, kinds, most }: Ca
       if (kinds.length > 0) void builder.whereIn('kind', kinds);
     })
     .select(...SHOWN, db.raw('match(??) against (? in boolean mode) as score', [where, words]))
-    .orderBy('score', 'desc')
     .limit(most);
-  return rows.map((row) => candidateRow.parse(row));
+  return rows.map((row) => candidateRow.parse(row)).toSorted((a, b) => b.score - a.score);
 }
 
 type Key = Pick<SearchEntry, 'kind' | 'region' | 'slug'>;

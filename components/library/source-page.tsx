@@ -79,14 +79,14 @@ function PlaceRests({ place: { code, name }, resting }: PlaceProps): ReactElemen
 }
 
 function Rest({ rest }: { readonly rest: Resting }): ReactElement {
-  const { id, title, place, citation } = rest;
+  const { id, title, citation } = rest;
   const { locator, passage, passageLang, standing, evidence } = citation;
   return (
     <>
       {rest.kind === 'rule' ? (
         <a href={`/rules/${id}`}>{title}</a>
       ) : (
-        <a href={`/regions/${place.code}#term-${id}`}>{words('library.sources.term', { name: title })}</a>
+        <a href={`/terms/${id}`}>{words('library.sources.term', { name: title })}</a>
       )}
       {locator === undefined ? null : <span className="block font-sans text-plain text-umber">{locator}</span>}
       {rest.kind === 'rule' ? (

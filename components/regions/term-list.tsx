@@ -36,6 +36,9 @@ export function TermList({ terms, names, numberOf }: Props): ReactElement {
                 <SourceDetails sources={term.sources} numberOf={numberOf} />
               </div>
             )}
+            <p className="not-in-print mt-3 font-sans text-plain">
+              <a href={`/terms/${term.id}`}>{words('regions.terms.uses')}</a>
+            </p>
           </Disclosure>
         </article>
       ))}

@@ -7,8 +7,8 @@ import type { SearchKind } from './domain/entry';
 import { MOST_SUGGESTED, type CompactEntry, type SuggestionIndex } from './domain/suggestion';
 
 /** Few kinds of entries grow without end; of those only so many are suggested, so that the index stays small. */
-const MOST: Readonly<Partial<Record<SearchKind, number>>> = { note: 500, word: 300, region: 300, rule: 700 };
-const KINDS = ['note', 'word', 'region', 'rule'] as const;
+const MOST: Readonly<Partial<Record<SearchKind, number>>> = { note: 500, word: 300, region: 300, term: 200, rule: 700 };
+const KINDS = ['note', 'word', 'region', 'term', 'rule'] as const;
 /** Other names in the reader's hands; all of them are known to the search itself. */
 const MOST_NAMES = 12;
 
@@ -34,6 +34,7 @@ async function makeIndex({ db }: Ctx): Promise<SuggestionIndex> {
       note: words('search.kinds.note'),
       word: words('search.kinds.word'),
       region: words('search.kinds.region'),
+      term: words('search.kinds.term'),
       rule: words('search.kinds.rule'),
       source: words('search.kinds.source'),
     },

@@ -40,7 +40,7 @@ export type Found = {
 const FEW = 5;
 const HEADINGS = 100;
 /** Few beside the rules, and wanted first: so that many rules never crowd them out. */
-const GUIDES = ['note', 'word', 'region'] as const;
+const GUIDES = ['note', 'word', 'region', 'term'] as const;
 const BASE = 'care';
 
 /** Finds notes, words, sheets, rules and texts by a reader's words; those of the reader's place come first. */

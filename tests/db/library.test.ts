@@ -6,6 +6,7 @@ import { listChanges } from '@/lib/regions/list-changes';
 import { listRegions } from '@/lib/regions/list-regions';
 import { listSources } from '@/lib/regions/list-sources';
 import { readSource } from '@/lib/regions/read-source';
+import { readTerm } from '@/lib/regions/read-term';
 import type { Ctx } from '@/lib/server/ctx';
 import { seedSheets } from '@/tests/builders/seed-sheets';
 import { foundSheets } from './founding';
@@ -100,6 +101,15 @@ describe('REG-45 sources of all places', () => {
       expect(await readSource(ctx, address)).toEqual({ ok: false, error: { kind: 'not-found' } });
     }
   });
+});
+
+test('REG-50 a word of a sheet is read by its id with what uses it, and an id of none leads nowhere', async () => {
+  const read = await readTerm(ctx, 'eu-flat');
+  if (!read.ok) throw new Error('There is no such word');
+  expect(read.value).toMatchObject({ term: { name: 'Flat ware, EU' }, edition: 1, withdrawn: false, sheet: { code: 'eu' } });
+  expect(read.value.term.sources[0]).toMatchObject({ locator: 'Art. 2(4), category 1' });
+  expect(read.value.uses.rules.map(({ id }) => id)).toEqual(expect.arrayContaining(['eu-pb-cat1', 'eu-cd-cat1']));
+  for (const id of ['eu-pb-cat1', 'nothing', '']) expect(await readTerm(ctx, id)).toEqual({ ok: false, error: { kind: 'not-found' } });
 });
 
 test('REG-46 a table of too many places holds eight and says how many it left out', async () => {

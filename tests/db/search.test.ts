@@ -6,6 +6,7 @@ import { GET as getIndex } from '@/app/api/v1/search-index/route';
 import { GET as getSearch } from '@/app/api/v1/search/route';
 import { db } from '@/db/connection';
 import { listEditions, lockSheet, publishEdition } from '@/db/editions';
+import { findCandidates } from '@/db/search';
 import { inTransaction } from '@/db/transaction';
 import { ok } from '@/lib/kernel/result';
 import type { Sheet } from '@/lib/regions/domain/sheet';
@@ -130,6 +131,29 @@ describe('hostile questions', () => {
   });
 });
 
+describe('candidates', () => {
+  const scores = z.array(z.object({ score: z.number() }).transform(({ score }) => score));
+
+  test.each([
+    ['+lead', 'all_words', []],
+    ['+lead +cadmium', 'all_words', []],
+    ['lead rim cadmium', 'all_words', ['rule']],
+    ['+lead', 'heading_words', ['note', 'word', 'region', 'term']],
+  ] as const)('SRCH-11 of what has %s in its %s (%j) the likeliest are found', async (words, where, kinds) => {
+    const found = await findCandidates(db, { words, where, kinds, most: 15 });
+    const sorted: unknown = await db('search_entries')
+      .whereRaw('match(??) against (? in boolean mode)', [where, words])
+      .where((builder) => {
+        if (kinds.length > 0) void builder.whereIn('kind', kinds);
+      })
+      .select(db.raw('match(??) against (? in boolean mode) as score', [where, words]))
+      .orderBy('score', 'desc')
+      .limit(15);
+    expect(found.length).toBeGreaterThan(3);
+    expect(found.map(({ score }) => score)).toEqual(scores.parse(sorted));
+  });
+});
+
 describe('places', () => {
   test('SRCH-5 what holds in the reader’s place stands first, and nothing found without it is missing', async () => {
     const { hits } = await search({ q: 'declaration', region: 'dk', limit: '100' });
@@ -142,7 +166,7 @@ describe('places', () => {
   });
 
   test('SRCH-5 a kind narrows to that kind', async () => {
-    for (const kind of ['note', 'word', 'region', 'rule', 'source']) {
+    for (const kind of ['note', 'word', 'region', 'term', 'rule', 'source']) {
       const found = await addresses({ q: 'lead ceramic', kind });
       expect([kind, found.every((address) => address.startsWith(`/${kind}s/`))]).toEqual([kind, true]);
     }

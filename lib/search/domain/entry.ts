@@ -1,7 +1,7 @@
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import type { Strength } from '@/lib/regions/domain/rule';
 
-export const SEARCH_KINDS = ['note', 'word', 'region', 'rule', 'source'] as const;
+export const SEARCH_KINDS = ['note', 'word', 'region', 'term', 'rule', 'source'] as const;
 export type SearchKind = (typeof SEARCH_KINDS)[number];
 
 export const isSearchKind = (value: unknown): value is SearchKind => SEARCH_KINDS.some((kind) => kind === value);
@@ -38,6 +38,8 @@ export function addressOf({ kind, region, slug }: Pick<SearchEntry, 'kind' | 're
       return `/words/${slug}`;
     case 'region':
       return `/regions/${slug}`;
+    case 'term':
+      return `/terms/${slug}`;
     case 'rule':
       return `/rules/${slug}`;
     case 'source':

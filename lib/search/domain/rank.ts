@@ -5,7 +5,7 @@ import { unitsOf, type Query, type Sought } from './query';
 import { readWords } from './read-words';
 
 /** How welcome a kind is beside another that fits as well: a note answers, a word explains, a text is only pointed to. */
-const WELCOME: Readonly<Record<SearchKind, number>> = { note: 0.6, word: 0.35, region: 0.2, rule: 0.12, source: 0 };
+const WELCOME: Readonly<Record<SearchKind, number>> = { note: 0.6, word: 0.35, region: 0.2, term: 0.15, rule: 0.12, source: 0 };
 
 const WEIGHT = { title: 1, also: 0.9, text: 0.25, share: 0.25, place: 0.6, sheet: 1, written: 0.2 };
 /** Only the likeliest are looked at letter by letter. */

@@ -5,12 +5,21 @@ import type { Sheet } from '@/lib/regions/domain/sheet';
 import type { SearchEntry } from './entry';
 import { placeNicknames } from './lexicon';
 
-/** What a reader finds of a sheet: the sheet itself, its rules, and the texts they rest on. */
+/** What a reader finds of a sheet: the sheet itself, its rules, the words it defines for them, and the texts they rest on. */
 export function sheetEntries(sheet: Sheet, edition: number): readonly SearchEntry[] {
   const of = { ...BARE, region: sheet.code, edition };
   return [
     { ...of, kind: 'region', slug: sheet.code, title: sheet.name, also: namesOf(sheet), text: plain([sheet.text, ...sheet.gaps]) },
     ...sheet.rules.map((rule): SearchEntry => ({ ...of, ...ruleParts(rule) })),
+    ...sheet.terms.map(({ id, name, says, from, to }): SearchEntry => ({
+      ...of,
+      kind: 'term',
+      slug: id,
+      title: name,
+      text: plain([says]),
+      from,
+      to,
+    })),
     ...sheet.sources.filter(({ id }) => id !== NO_TEXT).map((source): SearchEntry => ({ ...of, ...sourceParts(source) })),
   ];
 }

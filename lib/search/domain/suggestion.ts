@@ -18,7 +18,7 @@ export type Suggestion = { readonly address: string; readonly title: string; rea
 export const MOST_SUGGESTED = 6;
 const LONGEST = 60;
 /** The order of kinds that fit as well as each other. */
-const WELCOME: Readonly<Record<SearchKind, number>> = { note: 0, region: 0.05, word: 0.08, rule: 0.2, source: 0.3 };
+const WELCOME: Readonly<Record<SearchKind, number>> = { note: 0, region: 0.05, word: 0.08, term: 0.18, rule: 0.2, source: 0.3 };
 
 /** A finder over the index: what a reader may mean who has written that much. Small slips are forgiven. */
 export function makeSuggester({ entries }: SuggestionIndex): (text: string) => readonly Suggestion[] {
