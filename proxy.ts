@@ -29,10 +29,17 @@ function refuse(status: number, said: string): NextResponse {
 
 const isTooLarge = (request: NextRequest): boolean => !(Number(request.headers.get('content-length') ?? Number.NaN) <= LARGEST);
 
+/** The host that Next holds the origin against, and breaks off with 500 when it is another. */
+function namesUs(request: NextRequest): boolean {
+  const named = request.headers.get('x-forwarded-host') ?? request.headers.get('host') ?? '';
+  return named.split(',')[0]?.trim() === new URL(ownOrigin()).host;
+}
+
 /** Says in words what Next would answer with bare text. Protects nothing: every action asks again for itself. */
 function refusalOf(request: NextRequest): NextResponse | null {
   if (request.method === 'GET' || request.method === 'HEAD') return null;
   if (request.headers.get('origin') !== ownOrigin()) return refuse(403, broken.refused.origin);
+  if (!namesUs(request)) return refuse(421, broken.refused.host);
   return isTooLarge(request) ? refuse(413, broken.refused.size) : null;
 }
 

@@ -8,7 +8,11 @@ const SESSION = [
   `SET SESSION time_zone = '+00:00', SESSION sql_mode = '${SQL_MODE}', SESSION innodb_snapshot_isolation = ON, SESSION innodb_lock_wait_timeout = 5`,
 ];
 
-type Session = { query(sql: string, done: (error: Error | null) => void): void };
+type Done = (error: unknown, ...rest: unknown[]) => void;
+type Session = { query: (said: string | object, ...rest: unknown[]) => unknown; destroy: () => void };
+
+const isDone = (given: unknown): given is Done => typeof given === 'function';
+const isSilence = (error: unknown): boolean => error instanceof Error && 'code' in error && error.code === 'PROTOCOL_SEQUENCE_TIMEOUT';
 
 /** What mysql2 understands though Knex's types do not know of it. An object given for a value would else become a piece of SQL. */
 const BEYOND_KNEX = { dateStrings: ['DATE'], stringifyObjects: true };
@@ -43,13 +47,16 @@ export function knexSettings({
   return {
     client: 'mysql2',
     acquireConnectionTimeout: 3000,
+    // An error is logged: its statement may be read there, the values in it (hashes, mails, people) may not.
+    compileSqlOnError: false,
     // What fails is thrown as well, and logged once by whoever catches it.
     log: { error: () => undefined, warn: warnOfMisuse },
     pool: {
       min: 0,
       max: most,
-      afterCreate(session: Session, done: (error: Error | null, session: Session) => void): void {
+      afterCreate(session: Session, done: (error: unknown, session: Session) => void): void {
         prepare(session, statements, (error) => {
+          if (statementSeconds > 0) leaveSilence(session, statementSeconds * 1000 + 500);
           done(error, session);
         });
       },
@@ -63,13 +70,30 @@ function warnOfMisuse(message: string): void {
   if (!message.startsWith('Acquire connection error')) process.emitWarning(message);
 }
 
-function prepare(session: Session, [statement, ...rest]: readonly string[], done: (error: Error | null) => void): void {
+function prepare(session: Session, [statement, ...rest]: readonly string[], done: (error: unknown) => void): void {
   if (statement === undefined) {
     done(null);
     return;
   }
-  session.query(statement, (error) => {
+  session.query(statement, (error: unknown) => {
     if (error === null) prepare(session, rest, done);
     else done(error);
   });
+}
+
+/**
+ * A server that hangs ends no statement and closes no connection. What got no answer in time is given up, and its connection with it, so
+ * that nobody waits for ever; whether the statement was carried out is not known.
+ */
+function leaveSilence(session: Session, timeout: number): void {
+  const query = session.query.bind(session);
+  session.query = (said, ...rest) => {
+    const options = typeof said === 'string' ? { sql: said, timeout } : { ...said, timeout };
+    const done = rest.pop();
+    if (!isDone(done)) return query(options, ...rest, done);
+    return query(options, ...rest, (error: unknown, ...answer: unknown[]) => {
+      if (isSilence(error)) session.destroy();
+      done(error, ...answer);
+    });
+  };
 }

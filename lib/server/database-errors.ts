@@ -14,7 +14,7 @@ const ROLLED_BACK = new Set([1213, 1020, 1205, 1047, 1053, 1317, 1927, 1290]);
 const TOO_MANY_CONNECTIONS = new Set([1040, 1203]);
 const TOO_SLOW = 1969;
 const LOST =
-  /PROTOCOL_CONNECTION_LOST|ECONNRESET|ECONNREFUSED|EPIPE|ETIMEDOUT|ENOTFOUND|EAI_AGAIN|ER_ERROR_DURING_COMMIT|KnexTimeoutError|closed state|Acquire connection|ended by the other|Connection lost/;
+  /PROTOCOL_CONNECTION_LOST|PROTOCOL_SEQUENCE_TIMEOUT|ECONNRESET|ECONNREFUSED|EPIPE|ETIMEDOUT|ENOTFOUND|EAI_AGAIN|ER_ERROR_DURING_COMMIT|KnexTimeoutError|closed state|Acquire connection|ended by the other|Connection lost/;
 
 const textOf = (value: unknown): string => (typeof value === 'string' ? value : '');
 

@@ -50,14 +50,17 @@ async function guard<Answer>(work: () => Promise<Answer>): Promise<Answer> {
   }
 }
 
+/** Whoever calls an action by hand may send anything for its form: what is none is an empty one. */
+const formOf = (sent: unknown): FormData => (sent instanceof FormData ? sent : new FormData());
+
 /** The ground of every action with a state: asks where it came from, and turns what breaks into a page with a number. */
 export function guarded<State>(work: FormAction<State>): FormAction<State> {
-  return (prev, form) => guard(() => work(prev, form));
+  return (prev, form) => guard(() => work(prev, formOf(form)));
 }
 
 /** The same for a form without a state, whose every end is a redirect. */
 export function guardedForm(work: (form: FormData) => Promise<void>): (form: FormData) => Promise<void> {
-  return (form) => guard(() => work(form));
+  return (form) => guard(() => work(formOf(form)));
 }
 
 export type ActionPlan<Ctx, Input, Value, Refusal> = {

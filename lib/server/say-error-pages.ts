@@ -11,13 +11,18 @@ const STYLE =
 
 const link = (address: string, said: string): string => `<a href="${address}">${said}</a>`;
 
-const isGone = (status: number): boolean => status === 404 || status === 410;
+type Said = { readonly title: string; readonly titleOf: string; readonly lead: string };
+
+function wordsOf(status: number): Said {
+  if (status === 404 || status === 410) return broken.gone;
+  return status === 503 ? broken.away : broken;
+}
 
 /** The number under which the fault is in the log, as it lies in the data for the script, a piece of the answer further on. */
 const NUMBER = /\{\\"digest\\":\\"([\w-]+)\\"\}/;
 
 function words(status: number): string {
-  const said = isGone(status) ? broken.gone : broken;
+  const said = wordsOf(status);
   const ways = [link('/', broken.home), link('/regions', broken.regions), link('/contact', broken.help)];
   const items = ways.map((way) => `<li>${way}</li>`).join('');
   return `<style>${STYLE}</style><main><h1>${said.title}</h1><p>${said.lead}</p><ul>${items}</ul></main>`;
@@ -32,7 +37,7 @@ const textOf = (chunk: unknown): string | null =>
 export function withWords(chunk: unknown, status: number): Buffer | null {
   const html = status < 400 ? null : textOf(chunk);
   if (html === null || !html.includes(SHELL)) return null;
-  const title = isGone(status) ? broken.gone.titleOf : broken.titleOf;
+  const title = wordsOf(status).titleOf;
   const named = html.replace(/<title>[^<]*<\/title>/, '').replace('</head>', `<title>${title}</title></head>`);
   return Buffer.from(
     named.replace(SHELL, '<html id="__next_error__" lang="en">').replace('<body>', `<body><noscript>${words(status)}</noscript>`),

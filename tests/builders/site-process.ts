@@ -6,6 +6,8 @@ export type SiteProcess = {
   readonly child: ChildProcess;
   /** Its exit code, or the signal that ended it. */
   readonly ended: Promise<number | NodeJS.Signals>;
+  /** All that it wrote so far. */
+  readonly log: () => string;
 };
 
 function freePort(): Promise<number> {
@@ -39,7 +41,10 @@ export async function startSiteProcess(settings: Readonly<Record<string, string>
     DATABASE_OWNER_URL: '',
   };
   const next = [process.execPath, 'node_modules/next/dist/bin/next', 'start', '-p', String(port)];
-  const child = spawn('setpriv', ['--pdeathsig', 'KILL', '--', ...next], { env, stdio: ['ignore', 'ignore', 'inherit'] });
+  const child = spawn('setpriv', ['--pdeathsig', 'KILL', '--', ...next], { env, stdio: ['ignore', 'pipe', 'pipe'] });
+  const written: Buffer[] = [];
+  for (const output of [child.stdout, child.stderr]) output.on('data', (piece: Buffer) => written.push(piece));
+  const log = (): string => Buffer.concat(written).toString('utf8');
   const life = { over: false };
   const ended = new Promise<number | NodeJS.Signals>((resolve) => {
     child.once('exit', (code, signal) => {
@@ -49,6 +54,6 @@ export async function startSiteProcess(settings: Readonly<Record<string, string>
   });
   const address = `http://127.0.0.1:${String(port)}`;
   while (!life.over && !(await answers(address))) await new Promise((resolve) => setTimeout(resolve, 100));
-  if (life.over) throw new Error('A further site did not start.');
-  return { address, child, ended };
+  if (life.over) throw new Error(`A further site did not start:\n${log().slice(-2000)}`);
+  return { address, child, ended, log };
 }

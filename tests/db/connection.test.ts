@@ -1,6 +1,11 @@
+import knex from 'knex';
 import { expect, test } from 'vitest';
 import { z } from 'zod';
 import { db } from '@/db/connection';
+import { connectionTo, knexSettings } from '@/db/knex-settings';
+import { logLine } from '@/lib/server/log';
+import { retryAfterOf } from '@/lib/server/unavailable';
+import { openHaltingLine } from '../builders/halting-line';
 
 const variables = z.record(z.string(), z.union([z.string(), z.number()]));
 
@@ -80,3 +85,30 @@ test('the application may not read the accounts, the notes of the migrations, or
   expect(DENIED).toContain(await errnoOf(db('knex_migrations').select('*')));
   expect([...DENIED, 1045]).toContain(await errnoOf(db.raw("SELECT 1 INTO OUTFILE '/tmp/footring-written'")));
 });
+
+test('SRV-21 S40 an error of the database names the statement, and no value that was in it', async () => {
+  const fault: unknown = await db('sessions')
+    .insert({ agent: 'kestrel glaze', nowhere: 'kept secret' })
+    .catch((error: unknown) => error);
+  const line = logLine('error', { error: fault }, new Date());
+  expect(line).toContain('insert into `sessions`');
+  expect(line).not.toMatch(/kestrel|kept secret/);
+});
+
+test('SRV-20 S50 a server that stops in the middle of a statement holds nobody, and goes on being asked afterwards', async () => {
+  const url = z.string().parse(process.env['DATABASE_URL']);
+  const line = await openHaltingLine(url);
+  const own = knex({ ...knexSettings({ statementSeconds: 1, most: 2 }), connection: connectionTo(line.url) });
+  const ask = async (): Promise<unknown> => own.select({ one: own.raw('1') }).first();
+  expect(await ask()).toEqual({ one: 1 });
+  line.halt();
+  const fault: unknown = await ask().catch((error: unknown) => error);
+  expect(retryAfterOf(fault)).toBe(5);
+  const inTrx: unknown = await own.transaction((trx) => trx.select(trx.raw('1'))).catch((error: unknown) => error);
+  expect(retryAfterOf(inTrx)).toBe(5);
+  line.goOn();
+  // A connection that was being opened meanwhile may still fail whoever waits for it.
+  await expect.poll(() => ask().catch(() => null), { timeout: 10_000 }).toEqual({ one: 1 });
+  await own.destroy();
+  line.end();
+}, 20_000);

@@ -7,7 +7,8 @@ export type Fault = 'rolled-back' | 'lost-before' | 'lost-after';
 export const FAULTS: readonly Fault[] = ['rolled-back', 'lost-before', 'lost-after'];
 
 type Done = (error: Error | null, ...rest: unknown[]) => void;
-type Query = (options: unknown, values: unknown, done: Done) => unknown;
+/** Knex gives values between the statement and the callback, others may leave them out. */
+type Query = (options: unknown, ...rest: unknown[]) => unknown;
 type Connection = { query: Query; destroy: () => void };
 type AfterCreate = (connection: Connection, done: (error: Error | null, connection: Connection) => void) => void;
 
@@ -32,9 +33,10 @@ export function openFaultyPool(): FaultyPool {
 
   const spoil = (connection: Connection): void => {
     const query = connection.query.bind(connection);
-    connection.query = (options, values, done) => {
+    connection.query = (options, ...rest) => {
       count += 1;
-      if (!when(count)) return query(options, values, done);
+      if (!when(count)) return query(options, ...rest);
+      const done = rest.at(-1) as Done;
       if (fault === 'rolled-back') {
         // The server has rolled the whole transaction back by the time it says so.
         return query('ROLLBACK', [], () => {
@@ -45,7 +47,7 @@ export function openFaultyPool(): FaultyPool {
         connection.destroy();
         done(lost());
       };
-      if (fault === 'lost-after') return query(options, values, die);
+      if (fault === 'lost-after') return query(options, ...rest.slice(0, -1), die);
       die(null);
       return undefined;
     };

@@ -86,7 +86,7 @@ test('OUT-4 a mail whose worker is lost is sent by another, under the same Messa
   expect(seen).toEqual([`<${id}@footring.example.test>`, `<${id}@footring.example.test>`]);
 });
 
-test('OUT-5 a refusal for good ends a mail at once; one for now is tried eight times, then waits for a steward; others flow', async () => {
+test('OUT-5 F06 a refusal for good ends a mail at once; one for now is tried eight times, then waits for a steward; others flow', async () => {
   const tries = new Map<string, number>();
   await withServer({
     onRecipient: (address) => {
@@ -108,7 +108,7 @@ test('OUT-5 a refusal for good ends a mail at once; one for now is tried eight t
   expect((await states())['grey@example.test']).toMatchObject({ state: 'waiting', tries: 0 });
 });
 
-test('OUT-6 while the server is away no try is counted, however long that is', async () => {
+test('OUT-6 F06 while the server is away no try is counted, however long that is', async () => {
   await withServer();
   await server.close();
   await enqueue('mira@example.test');
@@ -119,7 +119,7 @@ test('OUT-6 while the server is away no try is counted, however long that is', a
   expect(server.received).toHaveLength(1);
 });
 
-test('OUT-6 a conversation that breaks off in this mail alone is counted', async () => {
+test('OUT-6 F06 a conversation that breaks off in this mail alone is counted', async () => {
   await withServer({ onMail: ({ to }) => (to[0] === 'poison@example.test' ? 'hang-up' : null) });
   await enqueue('poison@example.test');
   await enqueue('mira@example.test');

@@ -1,13 +1,14 @@
-import { afterAll, beforeAll, describe, expect, test, vi } from 'vitest';
+import { afterAll, afterEach, beforeAll, describe, expect, test, vi } from 'vitest';
 import { valuesOf } from '@/lib/server/define-action';
 import { logLine } from '@/lib/server/log';
+import { logConsole } from '@/lib/server/log-console';
 import { ownOrigin, samePlace } from '@/lib/server/own-site';
 import { withNumber, withWords } from '@/lib/server/say-error-pages';
 
 const AT = new Date('2026-12-01T10:00:00Z');
 
 describe('log', () => {
-  test('an entry is one line of JSON, whatever is in it', () => {
+  test('SRV-21 S40 an entry is one line of JSON, whatever is in it', () => {
     const line = logLine('error', { id: 'a\nb\u2028c\u202e\u009b', error: new Error('x\r\ny', { cause: new Error('why') }) }, AT);
     expect(line).not.toMatch(/[\n\r\u007f-\u009f\u2028\u2029\u202e]/);
     expect(JSON.parse(line)).toMatchObject({
@@ -35,6 +36,29 @@ describe('log', () => {
   });
 });
 
+describe('what the framework prints', () => {
+  const { error, warn } = console;
+  afterEach(() => {
+    Object.assign(console, { error, warn });
+    vi.restoreAllMocks();
+  });
+
+  test('SRV-21 S40 becomes lines of the log, without the fields of an error, and not what has its number there', () => {
+    const written: string[] = [];
+    vi.spyOn(process.stdout, 'write').mockImplementation((line) => written.push(String(line)) > 0);
+    logConsole();
+    console.error(' \u001b[31m\u001b[1m⨯\u001b[22m\u001b[39m', Object.assign(new Error('lost'), { sql: 'kept secret' }));
+    console.error(Object.assign(new Error('numbered'), { digest: '42' }));
+    console.warn('one\ntwo');
+    expect(written).toHaveLength(2);
+    expect(written.map((line): unknown => JSON.parse(line))).toMatchObject([
+      { level: 'error', words: [' ⨯'], error: { message: 'lost' } },
+      { level: 'warn', words: ['one\ntwo'] },
+    ]);
+    expect(written.join('')).not.toContain('kept secret');
+  });
+});
+
 describe('words on an error page without script', () => {
   const SHELL = '<!DOCTYPE html><html id="__next_error__"><head><title>Footring</title></head><body><script></script>';
 
@@ -44,6 +68,12 @@ describe('words on an error page without script', () => {
     expect(gone).toContain('<title>No such page – Footring</title>');
     expect(gone).toMatch(/<body><noscript>.*There is no page at this address.*<\/noscript>/s);
     expect(withWords(Buffer.from(SHELL), 500)?.toString()).toContain('Something broke on our side');
+  });
+
+  test('SRV-20 S50 a database that is away is no fault of the page: one is told to come back', () => {
+    const away = withWords(Buffer.from(SHELL), 503)?.toString() ?? '';
+    expect(away).toContain('We cannot look this up right now');
+    expect(away).not.toContain('Something broke');
   });
 
   test('nothing else is touched', () => {
