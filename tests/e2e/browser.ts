@@ -3,8 +3,11 @@ import { chromium, type Browser, type BrowserContext, type Page } from 'playwrig
 /** Address of the built site under test. */
 export const SITE = process.env['FOOTRING_SITE'] ?? 'http://localhost:3000';
 
-/** Widths in CSS pixels at which axe looks at pages: the narrowest each time, all of them in `npm run test:long`. */
-export const WIDTHS: readonly number[] = process.env['FOOTRING_EVERY_WIDTH'] === 'yes' ? [320, 1280] : [320];
+/** Whether pages are looked at in every width and theme there is, as `npm run test:long` does. */
+export const EVERY_LOOK = process.env['FOOTRING_EVERY_WIDTH'] === 'yes';
+
+/** Widths in CSS pixels at which axe looks at pages: the narrowest each time, all of them when every look is asked for. */
+export const WIDTHS: readonly number[] = EVERY_LOOK ? [320, 1280] : [320];
 
 const FLAGS = [
   '--no-sandbox',

@@ -1,4 +1,3 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { checkBriefly, choosePlace, MUG, visit } from './browser';
 
@@ -45,6 +44,8 @@ export async function routes(browser: Browser): Promise<readonly string[]> {
     '/regions/dk',
     '/regions/eu/on/2020-01-01',
     '/rules/ca-nonfood-warning',
+    '/rules/ca-nonfood-warning/doubt',
+    '/rules/ca-nonfood-warning/doubt/sent',
     '/check',
     '/check?why=none',
     `${check}/use`,
@@ -68,6 +69,7 @@ export async function routes(browser: Browser): Promise<readonly string[]> {
     '/notes/leach-test',
     '/words',
     '/words/crazing',
+    '/terms/eu-flat',
     '/accessibility',
     '/contact',
     '/day-book',
@@ -78,31 +80,4 @@ export async function routes(browser: Browser): Promise<readonly string[]> {
     '/broken',
     '/nope',
   ];
-}
-
-export type Look = { readonly width: number; readonly colours: readonly ('light' | 'dark')[] };
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-/** Rules whose outcome the colours decide; all others come out the same in both themes. */
-const COLOUR_RULES = ['color-contrast', 'link-in-text-block'];
-
-/** What axe finds on these pages, and which of them scroll sideways. The first colours get every rule, others those of colour. */
-export async function faultsOf(browser: Browser, pages: readonly string[], { width, colours }: Look): Promise<readonly unknown[]> {
-  const page = await (await visit(browser, { width })).newPage();
-  const faults: unknown[] = [];
-  for (const path of pages) {
-    await page.emulateMedia({ colorScheme: colours[0] ?? 'light' });
-    await page.goto(path);
-    for (const [place, colorScheme] of colours.entries()) {
-      await page.emulateMedia({ colorScheme });
-      const axe = new AxeBuilder({ page });
-      const { violations } = await (place === 0 ? axe.withTags(TAGS) : axe.withRules(COLOUR_RULES)).analyze();
-      faults.push(
-        ...violations.map(({ id, nodes }) => ({ path, colorScheme, id, at: nodes.slice(0, 3).map(({ target }) => target.join(' ')) })),
-      );
-    }
-    const wider = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
-    if (wider > 0) faults.push({ path, wider });
-  }
-  return faults;
 }

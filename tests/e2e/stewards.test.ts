@@ -1,4 +1,3 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { db } from '@/db/connection';
@@ -6,7 +5,8 @@ import { enqueueMail } from '@/db/outbox';
 import { inTransaction } from '@/db/transaction';
 import { ok } from '@/lib/kernel/result';
 import { nextMail } from '../builders/mailbox';
-import { openBrowser, SITE, visit, WIDTHS } from './browser';
+import { faultsOf } from './axe';
+import { openBrowser, SITE, visit } from './browser';
 import { aPerson, cookieOf, signIn, visitAs, type Person } from './signed-in';
 
 let browser: Browser;
@@ -125,8 +125,6 @@ describe.each([true, false])('with script: %s', (script) => {
   });
 });
 
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-
 test('W1 light and dark: axe finds nothing at the desk, and no page of it scrolls sideways', async () => {
   const maker = await aPerson('maker', 'Theodora Featherstonehaugh-Cholmondeley');
   const paths = [
@@ -142,25 +140,8 @@ test('W1 light and dark: axe finds nothing at the desk, and no page of it scroll
     '/day-book',
     '/day-book?kind=roles&from=2026-02-30',
   ];
-  const faults: unknown[] = [];
-  for (const width of WIDTHS) {
-    const page = await (await visitAs(browser, steward, { width })).newPage();
-    for (const path of paths) {
-      for (const colorScheme of ['light', 'dark'] as const) {
-        await page.emulateMedia({ colorScheme });
-        if (colorScheme === 'light') await page.goto(path);
-        const axe = new AxeBuilder({ page });
-        const { violations } = await (colorScheme === 'light' ? axe.withTags(TAGS) : axe.withRules(['color-contrast'])).analyze();
-        faults.push(
-          ...violations.map(({ id, nodes }) => ({ path, width, colorScheme, id, at: nodes.slice(0, 3).map(({ html }) => html) })),
-        );
-      }
-      const wider = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
-      if (wider > 0) faults.push({ path, width, wider });
-    }
-    await page.context().close();
-  }
-  expect(faults).toEqual([]);
+  const open = async (width: number) => (await visitAs(browser, steward, { width })).newPage();
+  expect(await faultsOf(open, paths)).toEqual([]);
 }, 900_000);
 
 /** The hidden fields of the form a steward sees: what Next needs to know which action is meant. */
