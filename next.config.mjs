@@ -15,6 +15,9 @@ const everywhere = [
   },
 ];
 
+/** What people have sent: here, since what stands here wins over what a handler says. */
+const kept = [{ key: 'content-security-policy', value: "sandbox; default-src 'none'; frame-ancestors 'none'" }];
+
 /** Behind a front server that ended TLS: only there does a promise of https make sense. */
 const overHttps = [{ key: 'strict-transport-security', value: 'max-age=63072000; includeSubDomains' }];
 
@@ -27,10 +30,13 @@ const config = {
   reactStrictMode: true,
   serverExternalPackages: ['knex', 'mysql2', 'rate-limiter-flexible'],
   turbopack: { root: dirname(fileURLToPath(import.meta.url)) },
+  // No picture is fetched or made smaller for anybody: the address that would do it does not exist.
+  images: { unoptimized: true, localPatterns: [], remotePatterns: [] },
   experimental: { serverActions: { bodySizeLimit: '2mb' } },
   async headers() {
     return [
       { source: '/:path*', headers: everywhere },
+      { source: '/api/files/:path*', headers: kept },
       { source: '/:path*', has: [{ type: 'header', key: 'x-forwarded-proto', value: 'https' }], headers: overHttps },
     ];
   },

@@ -21,6 +21,9 @@ const secret = z
   .base64({ error: 'must be at least 32 random bytes in base64' })
   .refine((text) => Buffer.from(text, 'base64').length >= 32, { error: 'must be at least 32 random bytes in base64' });
 
+/** An object store instead of the folder: whoever names one of its settings has to name the bucket and how to open it. */
+const S3_NEEDS = ['FOOTRING_S3_BUCKET', 'FOOTRING_S3_KEY', 'FOOTRING_S3_SECRET'] as const;
+
 const settings = z
   .object({
     NODE_ENV: z.string().optional(),
@@ -34,6 +37,19 @@ const settings = z
     FOOTRING_PROXIES: proxies.default([]),
     FOOTRING_DEMO: onOff.default(false),
     FOOTRING_API_PER_MINUTE: z.coerce.number().int().min(1).default(1200),
+    FOOTRING_STORE_DIR: z.string().default('.data/store'),
+    FOOTRING_S3_ENDPOINT: z.url({ protocol: /^https?$/, error: 'must be an address such as https://s3.example' }).optional(),
+    FOOTRING_S3_REGION: z.string().default('us-east-1'),
+    FOOTRING_S3_BUCKET: z
+      .string()
+      .regex(/^[a-z0-9][a-z0-9.-]{1,61}[a-z0-9]$/, { error: 'must be the name of a bucket' })
+      .optional(),
+    FOOTRING_S3_KEY: z.string().optional(),
+    FOOTRING_S3_SECRET: z.string().optional(),
+  })
+  .superRefine((it, ctx) => {
+    if ([it.FOOTRING_S3_ENDPOINT, ...S3_NEEDS.map((name) => it[name])].every((one) => one === undefined)) return;
+    for (const name of S3_NEEDS) if (it[name] === undefined) ctx.addIssue({ code: 'custom', path: [name], message: 'is not set' });
   })
   .superRefine((it, ctx) => {
     // A site without it could sign nobody in; better it does not start than that it fails at the first reader.
@@ -56,8 +72,29 @@ const settings = z
       proxies: it.FOOTRING_PROXIES,
       demo: it.FOOTRING_DEMO,
       apiPerMinute: it.FOOTRING_API_PER_MINUTE,
+      /** The folder of uploads, and of what is still being received when they lie in an object store. */
+      storeDir: it.FOOTRING_STORE_DIR,
+      /** The object store of uploads; null when they lie in the folder. */
+      s3: s3Of(it),
     };
   });
+
+type S3Given = {
+  readonly [Name in (typeof S3_NEEDS)[number] | 'FOOTRING_S3_ENDPOINT']?: string | undefined;
+} & { readonly FOOTRING_S3_REGION: string };
+export type S3Settings = {
+  readonly endpoint: string | null;
+  readonly region: string;
+  readonly bucket: string;
+  readonly key: string;
+  readonly secret: string;
+};
+
+function s3Of(it: S3Given): S3Settings | null {
+  const { FOOTRING_S3_BUCKET: bucket, FOOTRING_S3_KEY: key, FOOTRING_S3_SECRET: secret } = it;
+  if (bucket === undefined || key === undefined || secret === undefined) return null;
+  return { endpoint: it.FOOTRING_S3_ENDPOINT ?? null, region: it.FOOTRING_S3_REGION, bucket, key, secret };
+}
 
 export type Env = Readonly<z.output<typeof settings>>;
 
@@ -78,6 +115,16 @@ let read: Env | undefined;
 export function readEnv(): Env {
   read ??= parseEnv(process.env);
   return read;
+}
+
+/** As the server starts: with settings missing or wrong it ends. Next would go on, and answer every request with 500. */
+export function demandEnv(): void {
+  try {
+    readEnv();
+  } catch (error) {
+    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+    process.exit(1);
+  }
 }
 
 export const env: Env = {
@@ -107,5 +154,11 @@ export const env: Env = {
   },
   get apiPerMinute() {
     return readEnv().apiPerMinute;
+  },
+  get storeDir() {
+    return readEnv().storeDir;
+  },
+  get s3() {
+    return readEnv().s3;
   },
 };

@@ -76,6 +76,7 @@ async function journeys(database, more = {}) {
   const app = appEnv({ port, site, databaseUrl: database.appUrl('footring'), secret: SECRET, mailUrl: mail.mailUrl, demo: '1' });
   // Every journey comes from one address; the limit itself is tried on a site of its own.
   const env = { ...cleanEnv(), ...app, FOOTRING_API_PER_MINUTE: '1000000', DATABASE_OWNER_URL: database.ownerUrl('footring') };
+  env.FOOTRING_STORE_DIR = path.join(testFolder(), 'store');
   await must('The tables could not be made.', process.execPath, ['--import', 'tsx', 'scripts/migrate.ts', '--seed'], {
     log: path.join(dataFolder, 'migrate-test.log'),
     env: { ...env, TSX_TSCONFIG_PATH: '.ci/tsconfig.node.json' },
@@ -148,6 +149,11 @@ function cleanEnv() {
     FOOTRING_MAIL_FROM: '',
     FOOTRING_PROXIES: '',
     FOOTRING_DEMO: '',
+    FOOTRING_STORE_DIR: '',
+    FOOTRING_S3_ENDPOINT: '',
+    FOOTRING_S3_BUCKET: '',
+    FOOTRING_S3_KEY: '',
+    FOOTRING_S3_SECRET: '',
     PORT: '',
     FOOTRING_DIST: DIST,
     NEXT_TELEMETRY_DISABLED: '1',

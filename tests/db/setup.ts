@@ -1,3 +1,6 @@
+import { rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import knex, { type Knex } from 'knex';
 import { afterAll, inject } from 'vitest';
 import { z } from 'zod';
@@ -10,6 +13,8 @@ import { migrate } from '../../db/migrator';
  * through db/connection and with the application's rights; DATABASE_OWNER_URL is there for what only the owner may do.
  */
 const name = `footring_test_${process.env['VITEST_POOL_ID'] ?? '1'}`;
+/** Of this very file of tests: others may run beside it on the same machine. */
+const store = join(tmpdir(), `${name}-${String(process.pid)}`);
 const BOOKKEEPING = ['knex_migrations', 'knex_migrations_lock'];
 
 function at(url: string, database: string): string {
@@ -51,6 +56,7 @@ process.env['DATABASE_OWNER_URL'] = at(inject('ownerUrl'), name);
 process.env['FOOTRING_SECRET'] = Buffer.from('footring tests, not a secret one').toString('base64');
 process.env['FOOTRING_SITE'] = 'http://footring.example.test';
 process.env['FOOTRING_API_PER_MINUTE'] = '1000000';
+process.env['FOOTRING_STORE_DIR'] = store;
 
 await during(inject('ownerUrl'), (owner) =>
   owner.raw('CREATE DATABASE IF NOT EXISTS ?? CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci', [name]),
@@ -64,4 +70,5 @@ await during(at(inject('ownerUrl'), name), async (owner) => {
 afterAll(async () => {
   const { db } = await import('../../db/connection');
   await db.destroy();
+  await rm(store, { recursive: true, force: true });
 });

@@ -2,7 +2,7 @@ import { makeCtx } from '@/lib/server/ctx';
 import { readHealth } from '@/lib/server/health';
 import { version } from '@/lib/server/version';
 
-/** Ready to serve: 200 when the database answers, 503 when it does not. A worker or mail that is not well stops no reader. */
+/** Ready to serve: 200 when the database answers, 503 when it does not. A worker, mail or store of uploads that is not well stops no reader. */
 export async function GET(): Promise<Response> {
   const health = await readHealth(makeCtx().db);
   const isReady = health.database === 'ok';

@@ -51,13 +51,14 @@ export default async function HealthPage(): Promise<ReactElement> {
 }
 
 function Parts({ state: { health, mails, jobs, version } }: { readonly state: ServiceState }): ReactElement {
-  const { database, worker, mail } = health;
+  const { database, worker, mail, store } = health;
   return (
     <DefinitionList
       entries={[
         { id: 'database', name: words('stewards.health.database'), value: words(`stewards.health.is.database.${database}`) },
         { id: 'worker', name: words('stewards.health.worker'), value: words(`stewards.health.is.worker.${worker}`) },
         { id: 'mail', name: words('stewards.health.mail'), value: words(`stewards.health.is.mail.${mail}`) },
+        { id: 'store', name: words('stewards.health.store'), value: words(`stewards.health.is.store.${store}`) },
         {
           id: 'mails',
           name: words('stewards.health.mailCounts'),
