@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import { z } from 'zod';
-import type { AccountId, AccountRole } from '@/lib/access/domain/actor';
+import type { AccountId, AccountRole, Role } from '@/lib/access/domain/actor';
 import type { Account } from '@/lib/accounts/domain/account';
 import { accountRow } from './rows/account-row';
 import { namedRow, type NamedAccount } from './rows/account-search-row';
@@ -39,4 +39,17 @@ export async function listNamed(db: Knex, ids: readonly string[]): Promise<reado
     .whereIn('id', [...ids])
     .select('id', 'name', 'role', 'state');
   return z.array(namedRow).parse(rows);
+}
+
+/** Ids of those with one of these roles who can sign in. */
+export async function listJudges(db: Knex, roles: readonly Role[]): Promise<readonly AccountId[]> {
+  const rows: unknown = await db('accounts')
+    .whereIn('role', [...roles])
+    .where({ state: 'open' })
+    .limit(10_000)
+    .select('id', 'name', 'role', 'state');
+  return z
+    .array(namedRow)
+    .parse(rows)
+    .map(({ id }) => id);
 }

@@ -47,6 +47,8 @@ export type DayBookFilter = {
   readonly did?: readonly string[];
   readonly subject?: { readonly kind: string; readonly id: string };
   readonly actorId?: string;
+  /** The code of the place a line is about, as its details name it. */
+  readonly region?: string;
   readonly from?: Date;
   /** The first instant that is not asked for any more. */
   readonly until?: Date;
@@ -57,7 +59,7 @@ export type DayBookFilter = {
 
 /** Entries that meet all of the filter, newest first. */
 export async function listDayBook(db: Knex, filter: DayBookFilter): Promise<readonly BoundEntry[]> {
-  const { did, subject, actorId, from, until, before, limit } = filter;
+  const { did, subject, actorId, region, from, until, before, limit } = filter;
   const query = db('day_book')
     .select(...COLUMNS)
     .orderBy('number', 'desc')
@@ -65,6 +67,7 @@ export async function listDayBook(db: Knex, filter: DayBookFilter): Promise<read
   if (did !== undefined) void query.whereIn('did', [...did]);
   if (subject !== undefined) void query.where({ subject_kind: subject.kind, subject_id: subject.id });
   if (actorId !== undefined) void query.where({ actor_id: actorId });
+  if (region !== undefined) void query.whereRaw("json_value(details, '$.region') = ?", [region]);
   if (from !== undefined) void query.where('at', '>=', from);
   if (until !== undefined) void query.where('at', '<', until);
   if (before !== undefined) void query.where('number', '<', before);

@@ -44,7 +44,7 @@ export async function findEdition(db: Knex, region: string, number: number): Pro
 
 export type NewEdition = {
   readonly sheet: Sheet;
-  readonly origin: 'seed' | 'amendment';
+  readonly origin: 'seed' | 'amendment' | 'withdrawal';
   readonly summary: string;
   readonly at: Date;
 };
@@ -53,6 +53,40 @@ export type NewEdition = {
 export async function lockSheet(trx: Trx, region: string): Promise<number | null> {
   const row: unknown = await trx('sheets').where({ region }).select('region', 'edition_number').forUpdate().first();
   return row === undefined ? null : sheetLockRow.parse(row).edition_number;
+}
+
+/** Which edition of each sheet is in use. */
+export type WorldEditions = ReadonlyMap<string, number>;
+
+/**
+ * Locks every sheet there is, in the order of their codes, so that nothing else comes into use meanwhile: a proposal is judged with
+ * the sheets above and below it. Before any plain read of the transaction, which would freeze what it sees.
+ */
+export async function lockWorld(trx: Trx): Promise<WorldEditions> {
+  const rows: unknown[] = await trx('sheets').orderBy('region').select('region', 'edition_number').forUpdate();
+  return new Map(rows.map((row) => sheetLockRow.parse(row)).map(({ region, edition_number }) => [region, edition_number]));
+}
+
+/** The number of the edition in use; null for a place without a sheet. */
+export async function findNumberInUse(db: Knex, region: string): Promise<number | null> {
+  const row: unknown = await db('sheets').where({ region }).select('region', 'edition_number').first();
+  return row === undefined ? null : sheetLockRow.parse(row).edition_number;
+}
+
+/** The number of the edition in use of every sheet. */
+export async function listNumbersInUse(db: Knex): Promise<WorldEditions> {
+  const rows: unknown[] = await db('sheets').orderBy('region').limit(10_000).select('region', 'edition_number');
+  return new Map(rows.map((row) => sheetLockRow.parse(row)).map(({ region, edition_number }) => [region, edition_number]));
+}
+
+/** Codes of the sheets whose edition in use came of people: a seed leaves them alone. */
+export async function listAmended(db: Knex): Promise<ReadonlySet<string>> {
+  const rows: unknown[] = await db('sheets as s')
+    .join('editions as e', (on) => void on.on('e.region', 's.region').andOn('e.number', 's.edition_number'))
+    .whereNot('e.origin', 'seed')
+    .limit(10_000)
+    .select('s.region', 's.edition_number');
+  return new Set(rows.map((row) => sheetLockRow.parse(row).region));
 }
 
 /** Puts a new edition in use: its document, the rows drawn from it, and the sheet's number. The caller holds the lock. */

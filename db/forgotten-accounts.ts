@@ -2,8 +2,11 @@ import type { AccountId } from '@/lib/access/domain/actor';
 import { deleteArchivesOf } from './account-exports';
 import { deleteTokensOf } from './account-tokens';
 import { emptyAccount } from './accounts';
+import { letGoOfFiles } from './files';
 import { deleteJobsOf } from './jobs';
+import { deleteKeepingsOf } from './keepers';
 import { deleteMailsOf } from './outbox';
+import { deleteUnsentOf } from './amendments';
 import { deleteRecoveryCodes } from './recovery-codes';
 import { deleteRoleRequestsOf } from './role-requests';
 import { deleteSessionsOf } from './sessions';
@@ -19,8 +22,11 @@ export async function forgetPerson(trx: Trx, id: AccountId): Promise<void> {
   await deleteRecoveryCodes(trx, id);
   await deleteRoleRequestsOf(trx, id);
   await deleteArchivesOf(trx, id);
+  await deleteKeepingsOf(trx, id);
   await deleteMailsOf(trx, id);
   await deleteJobsOf(trx, id);
+  await deleteUnsentOf(trx, id);
+  await letGoOfFiles(trx, id);
   await trx('request_keys').where({ who: id }).del();
   await emptyAccount(trx, id);
 }

@@ -2,7 +2,7 @@ import type { Knex } from 'knex';
 import { z } from 'zod';
 
 /** Tables that are only ever added to: nobody, not even the application, may change or remove a row. */
-export const appendOnly: readonly string[] = ['editions', 'copies', 'day_book'];
+export const appendOnly: readonly string[] = ['editions', 'copies', 'day_book', 'amendment_decisions', 'edition_withdrawals'];
 
 const BOOKKEEPING = ['knex_migrations', 'knex_migrations_lock', 'seed_runs'];
 const whoRow = z.object({ account: z.string(), schema: z.string().nullable() });

@@ -1,4 +1,5 @@
 import type { ReactElement } from 'react';
+import { PlaceSelect, type Place } from '@/components/regions/place-select';
 import { Button } from '@/components/ui/button';
 import { SelectField } from '@/components/ui/select-field';
 import { TextField } from '@/components/ui/text-field';
@@ -7,6 +8,8 @@ import { words } from '@/lib/kernel/words';
 
 type Props = {
   readonly kind: string | undefined;
+  readonly region: string | undefined;
+  readonly places: readonly Place[];
   /** As they were typed. */
   readonly from: string;
   readonly until: string;
@@ -14,7 +17,7 @@ type Props = {
 };
 
 /** Asks for lines by a plain GET, so that what was found has an address. */
-export function LineFilter({ kind, from, until, wrong }: Props): ReactElement {
+export function LineFilter({ kind, region, places, from, until, wrong }: Props): ReactElement {
   const day = (name: 'from' | 'until', typed: string): ReactElement => (
     <TextField
       id={name}
@@ -42,6 +45,7 @@ export function LineFilter({ kind, from, until, wrong }: Props): ReactElement {
         options={ACT_KINDS.map((one) => ({ value: one, label: words(`day-book.filter.kinds.${one}`) }))}
         chosen={kind}
       />
+      <PlaceSelect label={words('day-book.filter.region')} none={words('day-book.filter.regionNone')} places={places} chosen={region} />
       {day('from', from)}
       {day('until', until)}
       <div>

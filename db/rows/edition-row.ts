@@ -6,7 +6,7 @@ export type EditionHead = {
   readonly region: string;
   readonly number: number;
   readonly hash: string;
-  readonly origin: 'seed' | 'amendment';
+  readonly origin: 'seed' | 'amendment' | 'withdrawal';
   readonly summary: string;
   readonly inUseFrom: Date;
 };
@@ -17,7 +17,7 @@ const head = {
   region: z.string(),
   number: z.number(),
   hash: z.string(),
-  origin: z.enum(['seed', 'amendment']),
+  origin: z.enum(['seed', 'amendment', 'withdrawal']),
   summary: z.string(),
   in_use_from: z.date(),
 };

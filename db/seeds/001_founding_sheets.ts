@@ -4,7 +4,7 @@ import { parsePlacesFile, parseSheetFile, type SeedFaults, type SeedPlace } from
 import { canonicalJson } from '@/lib/kernel/canonical-json';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { Sheet } from '@/lib/regions/domain/sheet';
-import { listEditions, lockSheet, publishEdition } from '../editions';
+import { listAmended, listEditions, lockSheet, lockWorld, publishEdition } from '../editions';
 import { fingerprint } from '../fingerprint';
 import { putRegion, replaceMemberships } from '../regions';
 import { inTransaction, type Trx } from '../transaction';
@@ -33,7 +33,8 @@ async function readPlaces(): Promise<readonly SeedPlace[]> {
 
 /**
  * Puts the founding sheets in: a sheet that is not there becomes edition 1; one whose last edition came from a seed and
- * reads otherwise by now becomes a new edition; one that people have amended is left alone. Safe to run again.
+ * reads otherwise by now becomes a new edition; one that people have amended is left alone, with its name, kind and layers.
+ * Safe to run again.
  */
 async function publishFounding(trx: Trx, sheet: Sheet, at: Date): Promise<void> {
   const number = await lockSheet(trx, sheet.code);
@@ -53,11 +54,16 @@ export async function seed(knex: Knex): Promise<void> {
   const coded = new Set(sheets.map(({ code }) => code));
   const at = new Date();
   await inTransaction(knex, async (trx) => {
-    for (const { code } of places) {
-      if (!coded.has(code)) await putRegion(trx, { code, name: names.of(code.toUpperCase()) ?? code, kind: 'country' });
+    // Held first, so that nothing comes into use while it is seen which sheets people have amended.
+    await lockWorld(trx);
+    const amended = await listAmended(trx);
+    const ours = sheets.filter(({ code }) => !amended.has(code));
+    const uncoded = places.filter(({ code }) => !coded.has(code) && !amended.has(code));
+    for (const { code } of uncoded) {
+      await putRegion(trx, { code, name: names.of(code.toUpperCase()) ?? code, kind: 'country' });
     }
-    for (const { code, name, kind } of sheets) await putRegion(trx, { code, name, kind });
-    for (const { code, memberships } of [...places.filter((place) => !coded.has(place.code)), ...sheets]) {
+    for (const { code, name, kind } of ours) await putRegion(trx, { code, name, kind });
+    for (const { code, memberships } of [...uncoded, ...ours]) {
       await replaceMemberships(trx, code, memberships);
     }
     for (const sheet of sheets) await publishFounding(trx, sheet, at);

@@ -1,5 +1,9 @@
 import { createTranslator } from 'use-intl/core';
 import accounts from '@/content/messages/en/accounts.json';
+import amend from '@/content/messages/en/amend.json';
+import doubts from '@/content/messages/en/doubts.json';
+import files from '@/content/messages/en/files.json';
+import review from '@/content/messages/en/review.json';
 import bench from '@/content/messages/en/bench.json';
 import broken from '@/content/messages/en/broken.json';
 import checks from '@/content/messages/en/checks.json';
@@ -28,6 +32,10 @@ export const LOCALE = 'en-GB';
 /** Every message of the interface, by file name. A file that is added joins here. */
 export const MESSAGES = {
   accounts,
+  amend,
+  doubts,
+  files,
+  review,
   bench,
   broken,
   checks,

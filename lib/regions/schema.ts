@@ -9,7 +9,7 @@ import { calendarDate, evidence, lang, regionCode, slug, words } from '@/lib/ker
 const openDate = calendarDate.nullable().default(null);
 const standing = z.enum(['law', 'guidance', 'standard', 'lab', 'common-practice']);
 
-const source = z.strictObject({
+export const source = z.strictObject({
   id: slug,
   title: words,
   publisher: words,
@@ -18,6 +18,9 @@ const source = z.strictObject({
   versionDate: words.exactOptional(),
   seenOn: calendarDate.exactOptional(),
   seenVia: words.exactOptional(),
+  fingerprint: z
+    .strictObject({ sha256: z.string().regex(/^[0-9a-f]{64}$/), type: words.max(100), bytes: z.int().positive() })
+    .exactOptional(),
 });
 
 const citation = z
@@ -31,7 +34,7 @@ const citation = z
   })
   .refine((it) => (it.passage === undefined) === (it.passageLang === undefined), { error: 'A passage needs its language, passageLang' });
 
-const rule = z
+export const rule = z
   .strictObject({
     id: slug,
     region: regionCode,
@@ -85,7 +88,7 @@ function faultsOfStanding({
   return checks.flatMap(([wrong, field, message]): readonly Fault[] => (wrong ? [[field, message]] : []));
 }
 
-const term = z.strictObject({
+export const term = z.strictObject({
   id: slug,
   region: regionCode,
   name: words,
@@ -98,7 +101,7 @@ const term = z.strictObject({
   facts: z.array(slug).default([]),
 });
 
-const trial = z.strictObject({
+export const trial = z.strictObject({
   id: slug,
   title: words.max(120),
   on: calendarDate,
@@ -109,7 +112,7 @@ const trial = z.strictObject({
     .refine((it) => Object.keys(it).length > 0, { error: 'A trial piece expects something of one rule at least' }),
 });
 
-const contact = z.strictObject({ name: words, url: z.url().nullable(), role: words, evidence });
+export const contact = z.strictObject({ name: words, url: z.url().nullable(), role: words, evidence });
 
 export const membership = z.strictObject({
   parent: regionCode,

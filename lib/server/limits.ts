@@ -23,6 +23,11 @@ const LIMITS = {
   'sign-up': { times: 10, withinS: 60 * MINUTE_S },
   /** Regions asked for from one address. */
   wish: { times: 20, withinS: 60 * MINUTE_S },
+  /** Doubts raised from one address, in an hour and in a day. */
+  'doubt-hour': { times: 5, withinS: 60 * MINUTE_S },
+  'doubt-day': { times: 20, withinS: 24 * 60 * MINUTE_S },
+  /** Files one person sends, kept or refused: each costs a look at its content. */
+  upload: { times: 120, withinS: 60 * MINUTE_S },
 } as const;
 
 export type LimitName = keyof typeof LIMITS | 'api';

@@ -24,6 +24,13 @@ export type MailValues = {
   'role-answer': Linked & { readonly answer: 'granted' | 'refused'; readonly reason: string };
   /** `on` as `sayDate` writes it. */
   'account-leaving': Linked & { readonly on: string };
+  'amendment-decided': Linked & {
+    readonly answer: 'used' | 'returned' | 'held' | 'overtaken';
+    readonly place: string;
+    /** The number it came into use as; empty otherwise. */
+    readonly edition: string;
+    readonly reason: string;
+  };
   'account-closed': Linked & { readonly reason: string };
   'account-reopened': Linked & { readonly reason: string };
   'someone-tried-to-sign-up': Linked & { readonly resetLink: string };
@@ -41,6 +48,7 @@ export const MAIL_NAMES: readonly MailName[] = [
   'role-changed',
   'role-answer',
   'account-leaving',
+  'amendment-decided',
   'account-closed',
   'account-reopened',
   'someone-tried-to-sign-up',

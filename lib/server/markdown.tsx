@@ -48,9 +48,19 @@ const DEEPEST_LINE = 24;
 const OPENERS = /^(?:[ \t]*(?:>|[-+*](?=[ \t])|\d{1,9}[.)](?=[ \t])))+/gm;
 const FAR_IN = /^[ \t]{80}/m;
 
+/** How much of this a text may hold: many times what people write, and little enough that parsing it is quick. */
+const MOST: readonly (readonly [what: RegExp, times: number])[] = [
+  [/\n|\r/g, 1000],
+  [/[[\]()`*_~<>&\\|#!:@]/g, 2000],
+  // A heading by the line under it: each one looks through all that came before.
+  [/^[ \t>]{0,12}(?:=+|-+)[ \t]*$/gm, 40],
+];
+
+const hasTooMany = (source: string): boolean => MOST.some(([what, times]) => (source.match(what) ?? []).length > times);
+
 /** Asked before parsing, whose time grows with the square of such a depth: 50 kB of ">" would take minutes. */
 function isTangled(source: string): boolean {
-  if (FAR_IN.test(source)) return true;
+  if (FAR_IN.test(source) || hasTooMany(source)) return true;
   return (source.match(OPENERS) ?? []).some((openers) => openers.replace(/[\s\d]+/g, '').length > DEEPEST_LINE);
 }
 

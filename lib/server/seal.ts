@@ -3,7 +3,7 @@ import { createCipheriv, createDecipheriv, createHmac, hkdfSync, randomBytes } f
 import { readEnv } from './env';
 
 /** What a key is for. Each purpose has a key of its own, so that nothing sealed for one can be shown as another. */
-type Purpose = 'session' | 'second-factor' | 'kept-form' | 'recovery-code' | 'session-id' | 'wish';
+type Purpose = 'session' | 'second-factor' | 'kept-form' | 'recovery-code' | 'session-id' | 'wish' | 'doubt' | 'form-stamp' | 'file-link';
 
 const IV = 12;
 const TAG = 16;

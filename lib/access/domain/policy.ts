@@ -30,7 +30,15 @@ export type Action =
   | 'role.grant'
   | 'outbox.read'
   | 'outbox.retry'
-  | 'health.read';
+  | 'health.read'
+  | 'amendment.write'
+  | 'amendment.judge'
+  | 'edition.withdraw'
+  | 'doubt.raise'
+  | 'doubt.answer'
+  | 'sheet.keep'
+  | 'file.keep'
+  | 'file.read';
 
 const from = (lowest: Role): readonly Role[] => ROLES.slice(rankOf(lowest));
 
@@ -64,6 +72,14 @@ export const POLICY: Readonly<Record<Action, readonly Role[]>> = {
   'outbox.read': from('steward'),
   'outbox.retry': from('steward'),
   'health.read': from('steward'),
+  'amendment.write': from('editor'),
+  'amendment.judge': from('moderator'),
+  'edition.withdraw': from('moderator'),
+  'doubt.raise': from('reader'),
+  'doubt.answer': from('editor'),
+  'sheet.keep': from('editor'),
+  'file.keep': from('editor'),
+  'file.read': from('editor'),
 };
 
 /** Those that need the password typed less than ten minutes ago. */
@@ -78,7 +94,13 @@ export const DELICATE: ReadonlySet<Action> = new Set<Action>([
 ]);
 
 /** Closed to an account whose address is not confirmed: what others see, or what speaks in its name. */
-export const NEEDS_CONFIRMED: ReadonlySet<Action> = new Set<Action>(['role.ask']);
+export const NEEDS_CONFIRMED: ReadonlySet<Action> = new Set<Action>([
+  'role.ask',
+  'amendment.write',
+  'doubt.answer',
+  'sheet.keep',
+  'file.keep',
+]);
 
 /** Open to a session that still owes its second factor; whatever a reader may do is open to it as well. */
 const WHILE_WAITING: ReadonlySet<Action> = new Set<Action>(['account.give-second-factor']);

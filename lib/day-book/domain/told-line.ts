@@ -22,6 +22,10 @@ export type ToldLine = {
   readonly whom: Said | null;
   readonly subjectKind: string;
   readonly change: { readonly from: AccountRole; readonly to: AccountRole } | null;
+  /** The code of the place a line on a sheet is about. */
+  readonly region: string | null;
+  /** The number of the edition that came of it. */
+  readonly edition: number | null;
   readonly reason: string | null;
 };
 
@@ -38,6 +42,8 @@ export function tellLine(entry: DayBookEntry, people: ReadonlyMap<string, Person
     whom: change === null ? null : nameOf(people.get(subject.id)),
     subjectKind: subject.kind,
     change,
+    region: textIn(details, 'region'),
+    edition: numberIn(details, 'edition'),
     reason,
   };
 }
@@ -50,7 +56,13 @@ const BY_STEWARDS: ReadonlySet<string> = new Set([...ACTS.roles, ...ACTS.account
 
 function whoDid(did: string, actorId: string | null, people: ReadonlyMap<string, Person>): Said {
   if (actorId === null) return { kind: 'site' };
-  return BY_STEWARDS.has(did) ? { kind: 'steward' } : nameOf(people.get(actorId));
+  return BY_STEWARDS.has(did) ? { kind: 'steward' } : sayActor(people.get(actorId));
+}
+
+/** How somebody is spoken of who acted: editors and moderators by the name of today, stewards by their role, others by what they were. */
+export function sayActor(person: Person | undefined): Said {
+  const said = nameOf(person);
+  return said.kind === 'named' && person?.role === 'steward' ? { kind: 'steward' } : said;
 }
 
 function nameOf(person: Person | undefined): Said {
@@ -67,4 +79,20 @@ function changeIn(details: Json): ToldLine['change'] {
 
 function roleIn(value: Json | undefined): AccountRole | null {
   return ROLES.find((role): role is AccountRole => role !== 'reader' && role === value) ?? null;
+}
+
+function detailOf(details: Json, name: string): Json | undefined {
+  return details === null || typeof details !== 'object' || Array.isArray(details)
+    ? undefined
+    : Object.entries(details).find(([key]) => key === name)?.[1];
+}
+
+function textIn(details: Json, name: string): string | null {
+  const value = detailOf(details, name);
+  return typeof value === 'string' ? value : null;
+}
+
+function numberIn(details: Json, name: string): number | null {
+  const value = detailOf(details, name);
+  return typeof value === 'number' ? value : null;
 }

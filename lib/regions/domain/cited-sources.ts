@@ -21,3 +21,16 @@ export function citeSources(cited: readonly ToldSource[]): CitedSources {
   }
   return { list: [...numbers.values()], numberOf: (source) => numbers.get(keyOf(source))?.number ?? 0 };
 }
+
+/** Citations of one text that differ in nothing but their place in it, as one citation of all these places. */
+export function alikeTogether(cited: readonly ToldSource[]): readonly ToldSource[] {
+  const alike = new Map<string, ToldSource>();
+  for (const source of cited) {
+    const { locator, passage, standing, evidence } = source;
+    const key = JSON.stringify([keyOf(source), standing, evidence, passage ?? null, locator === undefined]);
+    const met = alike.get(key);
+    if (met === undefined) alike.set(key, source);
+    else if (met.locator !== undefined && locator !== undefined) alike.set(key, { ...met, locator: `${met.locator}; ${locator}` });
+  }
+  return [...alike.values()];
+}

@@ -44,6 +44,7 @@ export type FieldName =
   | 'versionDate'
   | 'seenOn'
   | 'seenVia'
+  | 'fingerprint'
   | 'role'
   | 'evidence'
   | 'except'

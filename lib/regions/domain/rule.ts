@@ -17,7 +17,12 @@ export type Source = {
   readonly seenOn?: CalendarDate;
   /** Where the text was read when that was a copy and not `url`. */
   readonly seenVia?: string;
+  /** The page as it was seen, kept: the hash of its bytes, its kind and size. */
+  readonly fingerprint?: Fingerprint;
 };
+
+/** A kept file by its content: SHA-256 in lower-case hex, media type, size in bytes. */
+export type Fingerprint = { readonly sha256: string; readonly type: string; readonly bytes: number };
 
 /** One use of a source: the place in it, what standing it has for this claim, and whether it was read or is from memory. */
 export type Citation = {

@@ -86,6 +86,7 @@ export function sourceFields(source: Source): readonly Field[] {
     ...asText('versionDate', source.versionDate),
     ...onDay('seenOn', source.seenOn),
     ...asText('seenVia', source.seenVia),
+    ...asText('fingerprint', source.fingerprint?.sha256),
   ];
 }
 

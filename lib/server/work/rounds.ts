@@ -2,6 +2,7 @@ import 'server-only';
 import { deleteOldArchives } from '@/db/account-exports';
 import { deleteEndedTokens } from '@/db/account-tokens';
 import { deleteOldChecks } from '@/db/checks';
+import { dropDoubtTraces } from '@/db/doubts';
 import { deleteOldJobs } from '@/db/jobs';
 import { deleteOldKeptForms } from '@/db/kept-forms';
 import { deleteOldLimits } from '@/db/limits';
@@ -13,6 +14,7 @@ import { deleteLostWorkers } from '@/db/workers';
 import { forgetLeavers } from '@/lib/accounts/forget-leavers';
 import { keptSince } from '@/lib/checks/check-age';
 import { checkDayBook } from '@/lib/day-book/check-day-book';
+import { cleanFiles } from '@/lib/files/clean-files';
 import { sheetsSince } from '@/lib/readings/sheet-age';
 import type { Ctx } from '../ctx';
 import type { Round } from './job-handler';
@@ -55,6 +57,8 @@ export const ROUNDS: readonly Round[] = [
   { name: 'old-kept-forms', everyMs: 10 * MINUTE_MS, walk: (ctx) => sweep((most) => deleteOldKeptForms(ctx.db, ago(ctx, HOUR_MS), most)) },
   { name: 'old-archives', everyMs: HOUR_MS, walk: (ctx) => sweep((most) => deleteOldArchives(ctx.db, ago(ctx, DAY_MS), most)) },
   { name: 'day-book', everyMs: HOUR_MS, walk: checkDayBook },
+  { name: 'doubt-traces', everyMs: HOUR_MS, walk: (ctx) => sweep((most) => dropDoubtTraces(ctx.db, ago(ctx, DAY_MS), most)) },
   { name: 'leavers', everyMs: 10 * MINUTE_MS, walk: forgetLeavers },
+  { name: 'files', everyMs: 10 * MINUTE_MS, walk: (ctx) => cleanFiles(ctx) },
   { name: 'lost-workers', everyMs: 10 * MINUTE_MS, walk: ({ db }) => deleteLostWorkers(db, HOUR_MS) },
 ];
