@@ -6,8 +6,11 @@ import { BenchNotices } from '@/components/accounts/bench-notices';
 import { Note } from '@/components/accounts/note';
 import { PageHeading } from '@/components/ui/page-heading';
 import type { Role } from '@/lib/access/domain/actor';
+import { can } from '@/lib/access/domain/policy';
 import { readOwnAccount } from '@/lib/accounts/read-own-account';
 import { words } from '@/lib/kernel/words';
+import { listWaiting } from '@/lib/regions/list-waiting';
+import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { freshForm } from '@/lib/server/define-action';
 import { doorOf, enter } from '@/lib/server/lead-on';
 import { confirmAgain, stay } from './actions';
@@ -21,6 +24,13 @@ const LINKS = [
   ['/readings', 'readings'],
   ['/regions', 'regions'],
   ['/bench/account', 'account'],
+] as const;
+
+/** What editors, and those above them, look after. */
+const EDITOR_LINKS = [
+  ['/bench/amendments', 'amendments'],
+  ['/doubts', 'doubts'],
+  ['/look-again', 'lookAgain'],
 ] as const;
 
 export default async function BenchPage({ searchParams }: Props): Promise<ReactElement> {
@@ -46,14 +56,31 @@ export default async function BenchPage({ searchParams }: Props): Promise<ReactE
       </p>
       <h2 className="mt-8">{words('bench.do.title')}</h2>
       <ul className="mt-3" role="list">
-        {LINKS.map(([href, name]) => (
+        {[...LINKS, ...(can(actor, 'doubt.answer') ? EDITOR_LINKS : [])].map(([href, name]) => (
           <li key={href} className="py-1">
             <a href={href}>{words(`bench.do.${name}`)}</a>
           </li>
         ))}
+        <TableLink waiting={await countWaiting(ctx)} />
         <RoleLink role={actor.role} />
       </ul>
     </div>
+  );
+}
+
+/** How many amendments wait for a moderator: `unknown` before the second step is given, null for whoever is none. */
+async function countWaiting(ctx: ActorCtx): Promise<number | 'unknown' | null> {
+  if (!can(ctx.actor, 'amendment.judge')) return null;
+  const waiting = await listWaiting(ctx, {});
+  return waiting.ok ? waiting.value.length : 'unknown';
+}
+
+function TableLink({ waiting }: { readonly waiting: number | 'unknown' | null }): ReactElement | null {
+  if (waiting === null) return null;
+  return (
+    <li className="py-1">
+      <a href="/sorting-table">{waiting === 'unknown' ? words('review.link') : words('review.waiting', { count: waiting })}</a>
+    </li>
   );
 }
 

@@ -14,7 +14,7 @@ export const findSheet = cache(async (code: string, on?: CalendarDate): Promise<
   return found.ok ? found.value : null;
 });
 
-type Said = { readonly badDay?: string; readonly edition?: { readonly inUseTo: CalendarDate | null } };
+type Said = { readonly keeping?: ReactNode; readonly badDay?: string; readonly edition?: { readonly inUseTo: CalendarDate | null } };
 
 /** The page of a sheet, its texts drawn from Markdown. */
 export function drawSheet(sheet: RegionSheet, said: Said = {}): ReactElement {

@@ -6,6 +6,7 @@ import { words } from '@/lib/kernel/words';
 import { placeWords } from '@/lib/regions/domain/condition-words';
 import { regionCode } from '@/lib/regions/schema';
 import { countryCodes } from '@/lib/server/world-map';
+import { drawKeepers } from './draw-keepers';
 import { drawSheet, findSheet } from './find-sheet';
 
 type Props = {
@@ -22,12 +23,14 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 
 export default async function RegionPage({ params, searchParams }: Props): Promise<ReactElement> {
   const { code } = await params;
-  const { on } = await searchParams;
+  const query = await searchParams;
+  const { on } = query;
   const asked = typeof on === 'string' ? on.trim() : '';
   const day = parseCalendarDate(asked);
   if (day !== null && regionCode.safeParse(code).success) redirect(`/regions/${code}/on/${day}`);
   const sheet = await findSheet(code);
   if (sheet === null && countryCodes.includes(code)) redirect(`/regions?q=${encodeURIComponent(placeWords(code))}`);
   if (sheet === null) notFound();
-  return drawSheet(sheet, asked === '' ? {} : { badDay: asked.slice(0, 40) });
+  const keeping = await drawKeepers(sheet, query);
+  return drawSheet(sheet, asked === '' ? { keeping } : { keeping, badDay: asked.slice(0, 40) });
 }
