@@ -1,10 +1,15 @@
 import type { ReactElement } from 'react';
+import type { AccountRole } from '@/lib/access/domain/actor';
+import { POLICY } from '@/lib/access/domain/policy';
 import { words } from '@/lib/kernel/words';
 import { MenuLink } from './menu-link';
 
+/** Whoever is signed in, as far as the menu shows it. */
+export type Who = { readonly name: string; readonly role: AccountRole };
+
 type Props = {
   readonly path: string;
-  readonly who: { readonly name: string } | null;
+  readonly who: Who | null;
   readonly signOut: (form: FormData) => Promise<void>;
 };
 
@@ -23,6 +28,11 @@ export function AccountMenu({ path, who, signOut }: Props): ReactElement {
             <MenuLink href="/bench" path={path}>
               {words('bench.menu.bench')}
             </MenuLink>
+            {POLICY['amendment.judge'].includes(who.role) ? (
+              <MenuLink href="/sorting-table" path={path}>
+                {words('review.link')}
+              </MenuLink>
+            ) : null}
             <li>
               <form action={signOut}>
                 <button type="submit">{words('bench.menu.signOut')}</button>

@@ -1,14 +1,14 @@
 import type { ReactElement } from 'react';
 import { SiteSearch } from '@/components/search/site-search';
 import { words } from '@/lib/kernel/words';
-import { AccountMenu } from './account-menu';
+import { AccountMenu, type Who } from './account-menu';
 import { FootRingMark } from './foot-ring-mark';
 import { MenuLink } from './menu-link';
 
 type Props = {
   readonly path: string;
   /** Whoever is signed in. */
-  readonly who: { readonly name: string } | null;
+  readonly who: Who | null;
   readonly signOut: (form: FormData) => Promise<void>;
 };
 
