@@ -24,7 +24,7 @@ export default async function DayBookPage({ searchParams }: Props): Promise<Reac
   const typed = { from: typedIn(query, 'from'), until: typedIn(query, 'until') };
   const wrong = (['from', 'until'] as const).filter((name) => typed[name] !== '' && asked[name] === undefined);
   const ctx = makeCtx();
-  const [{ lines, next }, chain] = await Promise.all([readDayBook(ctx, asked), readChainState(ctx)]);
+  const [{ lines, next, places }, chain] = await Promise.all([readDayBook(ctx, asked), readChainState(ctx)]);
   const isFiltered = Object.values(asked).some((value) => value !== undefined);
   return (
     <>
@@ -38,7 +38,7 @@ export default async function DayBookPage({ searchParams }: Props): Promise<Reac
       <PageHeading>{words('day-book.title')}</PageHeading>
       <p className="mt-4 max-w-text">{words('day-book.lead')}</p>
       <div className="mt-6">
-        <LineFilter kind={asked.kind} {...typed} wrong={wrong} />
+        <LineFilter kind={asked.kind} region={asked.region} places={places} {...typed} wrong={wrong} />
       </div>
       {isFiltered ? (
         <p className="mt-4">
@@ -46,7 +46,11 @@ export default async function DayBookPage({ searchParams }: Props): Promise<Reac
         </p>
       ) : null}
       <div className="mt-8">
-        {lines.length === 0 ? <p>{isFiltered ? words('day-book.none') : words('day-book.nothingYet')}</p> : <LineTable lines={lines} />}
+        {lines.length === 0 ? (
+          <p>{isFiltered ? words('day-book.none') : words('day-book.nothingYet')}</p>
+        ) : (
+          <LineTable lines={lines} places={places} />
+        )}
       </div>
       {next === null ? null : (
         <p className="mt-6">
@@ -58,9 +62,10 @@ export default async function DayBookPage({ searchParams }: Props): Promise<Reac
   );
 }
 
-function olderOf({ kind, from, until }: DayBookQuery, before: number): string {
+function olderOf({ kind, region, from, until }: DayBookQuery, before: number): string {
   const query = new URLSearchParams({
     ...(kind === undefined ? {} : { kind }),
+    ...(region === undefined ? {} : { region }),
     ...(from === undefined ? {} : { from }),
     ...(until === undefined ? {} : { until }),
     before: String(before),

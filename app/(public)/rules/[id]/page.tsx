@@ -1,24 +1,19 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
-import { cache, type ReactElement } from 'react';
+import type { ReactElement } from 'react';
+import { RuleDoubts } from '@/components/doubts/rule-doubts';
 import { RulePage } from '@/components/regions/rule-page';
 import { calendarDateOf } from '@/lib/kernel/calendar-date';
 import { words } from '@/lib/kernel/words';
 import { namesOf } from '@/lib/regions/domain/sheet-names';
 import { contactsOf } from '@/lib/regions/domain/sheet-reading';
 import { readRegionSheet } from '@/lib/regions/read-region-sheet';
-import { readRule, type ReadRule } from '@/lib/regions/read-rule';
+import { readRuleDoubts } from '@/lib/regions/list-doubts';
 import { readRuleNeighbours } from '@/lib/regions/read-rule-neighbours';
-import { slug } from '@/lib/kernel/shapes';
 import { makeCtx } from '@/lib/server/ctx';
+import { findRule } from './find-rule';
 
 type Props = { readonly params: Promise<{ readonly id: string }> };
-
-const findRule = cache(async (id: string): Promise<ReadRule | null> => {
-  if (!slug.safeParse(id).success) return null;
-  const found = await readRule(makeCtx(), id);
-  return found.ok ? found.value : null;
-});
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const found = await findRule((await params).id);
@@ -31,7 +26,11 @@ export default async function RuleOfIdPage({ params }: Props): Promise<ReactElem
   const found = await findRule((await params).id);
   if (found === null) notFound();
   const ctx = makeCtx();
-  const [home, neighbours] = await Promise.all([readRegionSheet(ctx, { code: found.sheet.code }), readRuleNeighbours(ctx, found.rule)]);
+  const [home, neighbours, doubts] = await Promise.all([
+    readRegionSheet(ctx, { code: found.sheet.code }),
+    readRuleNeighbours(ctx, found.rule),
+    readRuleDoubts(ctx, found.rule.id),
+  ]);
   const sheet = home.ok ? home.value : null;
   return (
     <RulePage
@@ -43,6 +42,7 @@ export default async function RuleOfIdPage({ params }: Props): Promise<ReactElem
       neighbours={neighbours}
       authority={sheet === null ? null : (contactsOf(sheet, 'authorities')[0] ?? null)}
       today={calendarDateOf(ctx.now)}
+      doubts={<RuleDoubts {...doubts} />}
     />
   );
 }

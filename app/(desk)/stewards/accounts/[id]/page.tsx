@@ -42,7 +42,7 @@ export default async function AccountPage({ params, searchParams }: Props): Prom
         {lines.length === 0 ? (
           <p>{words('stewards.account.noLines')}</p>
         ) : (
-          <LineTable lines={lines.map((line) => tellLine(line, people))} />
+          <LineTable lines={lines.map((line) => tellLine(line, people))} places={[]} />
         )}
       </div>
     </DeskFrame>
