@@ -22,8 +22,9 @@ const sizeOf = (file) => {
 const sum = (files) => [...files].reduce((total, file) => total + sizeOf(file), 0);
 
 function kindOf(route) {
-  if (/^\/(bench|sorting-table|stewards|look-again)(\/|$)|\/amend(ments)?(\/|$)/.test(route)) return 'edit';
-  return /^\/(check|readings)(\/|$)/.test(route) ? 'check' : 'read';
+  if (/^\/(bench|sorting-table|stewards|look-again|doubts|regions\/new)(\/|$)|\/(amend(ments)?|withdraw)(\/|$)/.test(route)) return 'edit';
+  // Whatever one fills in without an account to edit by: answers, figures, a password, a doubt.
+  return /^\/(check|readings|sign-in|sign-up|reset|confirm)(\/|$)|\/doubt$/.test(route) ? 'check' : 'read';
 }
 
 function filesOf(key, rootFiles) {

@@ -1,4 +1,4 @@
-import type { ReactElement } from 'react';
+import type { ReactElement, ReactNode } from 'react';
 import { DefinitionList } from '@/components/ui/definition-list';
 import { Disclosure } from '@/components/ui/disclosure';
 import type { RuleMeaning } from '@/lib/checks/domain/meaning';
@@ -65,10 +65,12 @@ type DifferencesProps = {
   readonly meanings: readonly RuleMeaning[];
   readonly names: ComparedNames;
   readonly sides: Sides;
+  /** What a page puts below one change: remarks on it. */
+  readonly below?: (item: ItemDifference) => ReactNode;
 };
 
 /** Every change of a sheet under the heading of its list. */
-export function SheetDifferences({ items, meanings, names, sides }: DifferencesProps): ReactElement {
+export function SheetDifferences({ items, meanings, names, sides, below }: DifferencesProps): ReactElement {
   const meaningOf = new Map(meanings.map((meaning) => [meaning.rule, meaning]));
   return (
     <>
@@ -84,7 +86,9 @@ export function SheetDifferences({ items, meanings, names, sides }: DifferencesP
                 meaning={list === 'rules' ? meaningOf.get(item.id) : undefined}
                 names={names}
                 sides={sides}
-              />
+              >
+                {below?.(item)}
+              </ItemDifferenceBlock>
             ))}
           </section>
         );

@@ -19,17 +19,20 @@ type Props = {
 
 const COLOURS = { added: 'celadon', withdrawn: 'ash', changed: 'cobalt', moved: 'plain' } as const;
 
-/** One thing that is otherwise: its name, how it changed, and the fields that differ. */
-export function ItemDifferenceBlock(props: Props): ReactElement {
-  const { item, names } = props;
+/** One thing that is otherwise: its name, how it changed, the fields that differ, and what the page puts below them. */
+export function ItemDifferenceBlock({ children, ...props }: Props & { readonly children?: ReactNode }): ReactElement {
+  const { item, names, sides } = props;
   const title = item.list === 'memberships' ? (names.regions.get(item.title) ?? item.title) : item.title;
+  // A rule that is only proposed has no page yet.
+  const hasPage = item.list === 'rules' && !(sides === 'amendment' && item.change === 'added');
   return (
     <section className="mt-6" id={`${item.list}-${item.id}`.replaceAll(' ', '-')}>
       <h3>
-        {item.list === 'rules' ? <a href={`/rules/${item.id}`}>{title}</a> : title}{' '}
+        {hasPage ? <a href={`/rules/${item.id}`}>{title}</a> : title}{' '}
         <Badge colour={COLOURS[item.change]}>{words(`editions.change.${item.change}`)}</Badge>
       </h3>
       <Content {...props} title={title} />
+      {children}
     </section>
   );
 }

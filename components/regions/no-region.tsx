@@ -32,6 +32,9 @@ export function NoRegion({ asked, nearest }: Props): ReactElement {
         </LinkButton>
       </p>
       <p>
+        <a href="/regions/new">{words('amend.newPlace.link')}</a>
+      </p>
+      <p>
         <a href="/contact">{words('regions.list.none.ask')}</a>
       </p>
       <p>

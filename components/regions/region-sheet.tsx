@@ -23,6 +23,8 @@ type Props = {
   readonly today: CalendarDate;
   readonly introduction: ReactNode;
   readonly coming: ReactNode;
+  /** Who keeps the sheet. */
+  readonly keeping?: ReactNode;
   /** What was asked for as a day and is none. */
   readonly badDay?: string | undefined;
   /** Set where one edition is read by its number. */
@@ -30,7 +32,7 @@ type Props = {
 };
 
 /** All that is held on one place, as read on a day or as one edition had it. */
-export function RegionSheetPage({ sheet, today, introduction, coming, badDay, edition }: Props): ReactElement {
+export function RegionSheetPage({ sheet, today, introduction, coming, keeping, badDay, edition }: Props): ReactElement {
   const layers = [sheet, ...sheet.above];
   const names = namesOf(layers);
   const cited = citeSources(citationsOf(sheet));
@@ -49,6 +51,7 @@ export function RegionSheetPage({ sheet, today, introduction, coming, badDay, ed
         <div className="main-part">
           <SheetBanner sheet={sheet} names={names} today={today} inUseTo={edition?.inUseTo ?? null} />
           <Remarks sheet={sheet} today={today} edition={edition} />
+          {keeping}
           {sheet.kind === 'base' ? null : (
             <p className="mt-6">
               <LinkButton href={`/check?region=${sheet.code}`}>{words('regions.sheet.check', { name: sheet.name })}</LinkButton>
@@ -141,6 +144,11 @@ function MoreLinks({ sheet }: Pick<Props, 'sheet'>): ReactElement {
     <section className="not-in-print mt-12" aria-labelledby="more">
       <h2 id="more">{words('regions.sheet.links')}</h2>
       <ul className="mt-2 font-sans text-plain">
+        <li>
+          <a className="inline-block py-2" href={`/regions/${sheet.code}/amend`}>
+            {words('amend.begin.link')}
+          </a>
+        </li>
         <li>
           <a className="inline-block py-2" href={`/sources?region=${sheet.code}`}>
             {words('library.sources.ofSheet')}

@@ -1,4 +1,6 @@
 import type { ReactElement, ReactNode } from 'react';
+import { AmendLink } from '@/components/amend/amend-link';
+import { DoubtLink } from '@/components/doubts/doubt-link';
 import { Disclosure } from '@/components/ui/disclosure';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
 import { sayDate } from '@/lib/kernel/say';
@@ -46,12 +48,8 @@ export function RuleCard({
 }: Props): ReactElement {
   const Heading = `h${level}` as const;
   return (
-    <article
-      id={`${prefix}rule-${rule.id}`}
-      className="keep-together border-b border-rule py-4"
-      aria-labelledby={`${prefix}rule-${rule.id}-title`}
-    >
-      <Heading id={`${prefix}rule-${rule.id}-title`}>
+    <article id={`${prefix}rule-${rule.id}`} className="keep-together border-b border-rule py-4">
+      <Heading>
         <a href={`/rules/${rule.id}`}>{rule.title}</a>
       </Heading>
       <StrengthLine strength={rule.strength} standing={rule.standing} evidence={rule.evidence} />
@@ -69,6 +67,10 @@ export function RuleCard({
           <p className="font-sans text-plain text-umber">{sayDates(rule)}.</p>
         </Disclosure>
       )}
+      <p className="flex flex-wrap gap-x-6 font-sans text-plain">
+        <DoubtLink rule={rule} />
+        {details === 'all' ? <AmendLink rule={rule} /> : null}
+      </p>
     </article>
   );
 }

@@ -39,7 +39,7 @@ export function statusWords(status: MeaningExample['before']): string {
 }
 
 /** The piece in a sentence: "A bowl; 40 mm deep inside; Made to be drunk from". */
-function pieceWords(answers: Answers, placeNames: ReadonlyMap<string, string>): string {
+export function pieceWords(answers: Answers, placeNames: ReadonlyMap<string, string>): string {
   const { form, ...others } = answers;
   const said = Object.entries(others).map(([id, answer]) => sayAnswer(id, answer, placeNames));
   if (form === undefined && said.length === 0) return words('editions.example.any');

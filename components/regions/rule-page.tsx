@@ -1,6 +1,8 @@
 import type { ReactElement, ReactNode } from 'react';
 import { Caution } from '@/components/checks/caution';
 import { StateMark } from '@/components/checks/state-mark';
+import { AmendLink } from '@/components/amend/amend-link';
+import { DoubtLink } from '@/components/doubts/doubt-link';
 import { PageHeading } from '@/components/ui/page-heading';
 import { Panel } from '@/components/ui/panel';
 import type { CalendarDate } from '@/lib/kernel/calendar-date';
@@ -30,6 +32,8 @@ type Props = {
   /** The one to ask first. */
   readonly authority: Contact | null;
   readonly today: CalendarDate;
+  /** What readers doubted about it. */
+  readonly doubts?: ReactNode;
 };
 
 /** A rule in full. */
@@ -68,24 +72,37 @@ export function RulePage(props: Props): ReactElement {
       <Part id="dates">
         <Dates rule={rule} edition={props.edition} today={today} />
       </Part>
-      <ul className="not-in-print mt-8 font-sans text-plain">
-        <li>
-          <a className="inline-block py-2" href={`/sources?rule=${rule.id}`}>
-            {words('library.sources.ofRule')}
-          </a>
-        </li>
-        <li>
-          <a className="inline-block py-2" href={`/contact?about=/rules/${rule.id}`}>
-            {words('regions.rule.doubt')}
-          </a>
-        </li>
-        <li>
-          <a className="inline-block py-2" href={`/api/v1/rules/${rule.id}`}>
-            {words('regions.rule.data')}
-          </a>
-        </li>
-      </ul>
+      {props.doubts}
+      <RuleLinks rule={rule} withdrawn={props.withdrawn} />
     </article>
+  );
+}
+
+/** Where one goes on from a rule. What is withdrawn is neither doubted nor amended. */
+function RuleLinks({ rule, withdrawn }: Pick<Props, 'rule' | 'withdrawn'>): ReactElement {
+  return (
+    <ul className="not-in-print mt-8 font-sans text-plain">
+      <li>
+        <a className="inline-block py-2" href={`/sources?rule=${rule.id}`}>
+          {words('library.sources.ofRule')}
+        </a>
+      </li>
+      {withdrawn ? null : (
+        <>
+          <li>
+            <DoubtLink rule={rule} />
+          </li>
+          <li>
+            <AmendLink rule={rule} />
+          </li>
+        </>
+      )}
+      <li>
+        <a className="inline-block py-2" href={`/api/v1/rules/${rule.id}`}>
+          {words('regions.rule.data')}
+        </a>
+      </li>
+    </ul>
   );
 }
 

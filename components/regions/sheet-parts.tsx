@@ -179,4 +179,11 @@ function askPart({ sheet, names }: SheetView): SheetPart {
 }
 
 const sourcesPart = ({ cited }: SheetView): MaybePart =>
-  cited.list.length === 0 ? null : { id: 'sources', title: words('regions.part.sources'), body: <CitedList list={cited.list} /> };
+  cited.list.length === 0 ? null : { id: 'sources', title: words('regions.part.sources'), body: <Sources cited={cited} /> };
+
+const Sources = ({ cited }: Pick<SheetView, 'cited'>): ReactNode => (
+  <>
+    <p className="mb-4">{words('regions.source.passages')}</p>
+    <CitedList list={cited.list} />
+  </>
+);

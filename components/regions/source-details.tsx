@@ -1,5 +1,6 @@
 import type { ReactElement } from 'react';
 import { words } from '@/lib/kernel/words';
+import { alikeTogether } from '@/lib/regions/domain/cited-sources';
 import type { ToldSource } from '@/lib/regions/domain/told-rule';
 import { CitationNotes } from './source-notes';
 
@@ -24,7 +25,7 @@ export function SourceDetails({ sources, numberOf }: Props): ReactElement {
   }
   return (
     <ul className="flex flex-col gap-2 font-sans text-plain">
-      {sources.map((source, place) => (
+      {alikeTogether(sources).map((source, place) => (
         <li key={place} className="keep-together">
           <SourceLink number={numberOf(source)} locator={source.locator} />. <cite>{source.title}</cite>
           <Passage source={source} />
@@ -68,12 +69,9 @@ type TitleProps = { readonly title: string; readonly url?: string | undefined };
 export function SourceTitle({ title, url }: TitleProps): ReactElement {
   if (url === undefined) return <cite>{title}</cite>;
   return (
-    <>
-      <a href={url}>
-        <cite>{title}</cite>
-      </a>
-      <span className="only-print wrap-anywhere"> ({url})</span>
-    </>
+    <a href={url} className="address-in-print">
+      <cite>{title}</cite>
+    </a>
   );
 }
 

@@ -6,15 +6,20 @@ import type { ToldSource } from '@/lib/regions/domain/told-rule';
 type Note = { readonly id: string; readonly said: ReactNode };
 type Text = { readonly [Key in 'versionDate' | 'seenOn' | 'seenVia']?: ToldSource[Key] | undefined };
 
-/** Notes on a source, each a phrase that stands by itself. Long addresses break where they must. */
+/** Notes on a source, each a phrase that stands by itself, on a line of their own. Long addresses break where they must. */
 function NoteList({ notes }: { readonly notes: readonly Note[] }): ReactElement | null {
   if (notes.length === 0) return null;
+  const texts = notes.flatMap(({ said }) => (typeof said === 'string' ? [said] : []));
+  if (texts.length === notes.length) return <span className="block text-umber">{texts.join(' · ')}</span>;
   return (
-    <ul className="flex flex-wrap gap-x-4 wrap-anywhere text-umber">
-      {notes.map(({ id, said }) => (
-        <li key={id}>{said}</li>
+    <span className="block wrap-anywhere text-umber">
+      {notes.map(({ id, said }, place) => (
+        <Fragment key={id}>
+          {place === 0 ? '' : ' · '}
+          {said}
+        </Fragment>
       ))}
-    </ul>
+    </span>
   );
 }
 
@@ -31,13 +36,24 @@ export function CitationNotes({ source, printed }: { readonly source: ToldSource
     <NoteList
       notes={[
         { id: 'standing', said: words(`regions.source.${source.standing}`) },
-        ...textNotes(printed ? source : { seenOn: source.seenOn }, printed),
+        ...(printed ? textNotes(source, true) : seenPlainly(source)),
         ...(source.evidence === 'memory' ? [{ id: 'memory', said: words('regions.source.memory') }] : []),
-        ...(source.passage === undefined ? [{ id: 'passage', said: words('regions.source.noPassage') }] : []),
+        ...(printed && source.passage === undefined ? [{ id: 'passage', said: words('regions.source.noPassage') }] : []),
       ]}
     />
   );
 }
+
+/** Of a text on a long page: the day it was read, and whether that was a copy. */
+export function BriefNotes({ text: { seenOn, seenVia } }: { readonly text: Text }): ReactElement | null {
+  if (seenOn === undefined) return null;
+  const said = words(seenVia === undefined ? 'regions.source.seenOn' : 'regions.source.seenInCopy', { date: sayDate(seenOn) });
+  return <span className="block text-umber">{said}</span>;
+}
+
+/** Where the numbered list on the page has the rest of it: the day alone. */
+const seenPlainly = ({ seenOn }: ToldSource): readonly Note[] =>
+  seenOn === undefined ? [] : [{ id: 'seen', said: words('regions.source.seenOn', { date: sayDate(seenOn) }) }];
 
 function textNotes({ versionDate, seenOn, seenVia }: Text, printed: boolean): readonly Note[] {
   return [
@@ -67,8 +83,9 @@ function Copy({ text, printed }: { readonly text: string; readonly printed: bool
         if (site === null) return <Fragment key={place}>{part}</Fragment>;
         return (
           <Fragment key={place}>
-            <a href={part}>{site}</a>
-            {printed ? <span className="only-print"> ({part})</span> : null}
+            <a href={part} className={printed ? 'address-in-print' : undefined}>
+              {site}
+            </a>
           </Fragment>
         );
       })}

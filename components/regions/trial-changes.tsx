@@ -15,8 +15,8 @@ export function TrialChanges({ trials: { total, unchanged, unread, changed }, na
       <h2 id="changed-trials-run">{words('editions.trials.title')}</h2>
       <p className="mt-2 max-w-text">
         {total === 0
-          ? words('editions.trials.none')
-          : `${words('editions.trials.lead')} ${words('editions.trials.count', { unchanged, total })}`}
+          ? words(sides === 'editions' ? 'editions.trials.none' : 'editions.trials.noneAmendment')
+          : `${words(sides === 'editions' ? 'editions.trials.lead' : 'editions.trials.leadAmendment')} ${words('editions.trials.count', { unchanged, total })}`}
         {unread === 0 ? null : ` ${words('editions.trials.unread', { count: unread })}`}
       </p>
       {changed.length === 0 ? null : (

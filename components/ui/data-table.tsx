@@ -1,6 +1,14 @@
 import type { ReactElement, ReactNode } from 'react';
 
-export type Column = { readonly id: string; readonly heading: ReactNode; readonly numeric?: true };
+export type Column = {
+  readonly id: string;
+  readonly heading: ReactNode;
+  /** The heading in front of a cell, where the heading itself is a link: that belongs in the head alone. */
+  readonly label?: string;
+  readonly numeric?: true;
+  /** Where rows can be sorted by it: whether they are now, and how. */
+  readonly sort?: 'ascending' | 'descending' | 'none';
+};
 /** `cells` by the ids of the columns; the first column is the row's header. */
 export type Row = { readonly id: string; readonly cells: Readonly<Record<string, ReactNode>>; readonly lang?: string };
 
@@ -26,7 +34,13 @@ export function DataTable({ id, caption, columns, rows }: Props): ReactElement {
         <thead role="rowgroup">
           <tr role="row">
             {columns.map((column) => (
-              <th key={column.id} role="columnheader" scope="col" className={column.numeric === true ? 'numeric' : undefined}>
+              <th
+                key={column.id}
+                role="columnheader"
+                scope="col"
+                aria-sort={column.sort}
+                className={column.numeric === true ? 'numeric' : undefined}
+              >
                 {column.heading}
               </th>
             ))}
@@ -62,7 +76,7 @@ function Cell({ column, heads, children }: CellProps): ReactElement {
   return (
     <td role="cell" className={className}>
       <span className="cell-label" aria-hidden="true">
-        {column.heading}:{' '}
+        {column.label ?? column.heading}:{' '}
       </span>
       {children}
     </td>

@@ -30,13 +30,36 @@ import { signInAgain } from '@/lib/accounts/sign-in-again';
 import { turnOffSecondFactor } from '@/lib/accounts/turn-off-second-factor';
 import { turnOnSecondFactor } from '@/lib/accounts/turn-on-second-factor';
 import { withdrawRoleRequest } from '@/lib/accounts/withdraw-role-request';
+import type { FileId } from '@/lib/files/domain/kept-file';
+import { keepPageSeen } from '@/lib/files/keep-page-seen';
+import { readFile } from '@/lib/files/read-file';
 import { ok } from '@/lib/kernel/result';
 import { retryParked } from '@/lib/notices/retry-parked';
+import { addRemark } from '@/lib/regions/add-remark';
+import { answerRemark } from '@/lib/regions/answer-remark';
+import { approveAmendment } from '@/lib/regions/approve-amendment';
+import type { AmendmentId } from '@/lib/regions/domain/amendment';
+import { holdAmendment } from '@/lib/regions/hold-amendment';
+import { markRemark } from '@/lib/regions/mark-remark';
+import { releaseAmendment } from '@/lib/regions/release-amendment';
+import { sendBackAmendment } from '@/lib/regions/send-back-amendment';
+import { tickClaim } from '@/lib/regions/tick-claim';
+import { waitingStamp } from '@/lib/regions/waiting-stamp';
+import { withdrawEdition } from '@/lib/regions/withdraw-edition';
+import { answerDoubt } from '@/lib/regions/answer-doubt';
+import { becomeKeeper } from '@/lib/regions/become-keeper';
+import { setAsideDoubt } from '@/lib/regions/set-aside-doubt';
+import { stopKeeping } from '@/lib/regions/stop-keeping';
+import { takeDoubtUp } from '@/lib/regions/take-doubt-up';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { newId } from '@/lib/server/new-id';
 import type { CurrentSession } from '@/lib/server/session';
 import { handleOf } from '@/lib/server/token';
+import { DRAFT_DOORS } from './draft-doors';
+import { aKeptFile } from './kept-files';
+import { aDoubt, aDoubtedPlace, aKept, aSetAside } from './doubts';
 import { anAccount, aSession, NOW } from './people';
+import { aSentAmendment } from './sent-amendments';
 
 /** Whoever presses: their account, its session's row, and what a use case gets. Somebody without an account has an id nobody has. */
 export type Presser = { readonly id: AccountId; readonly hasAccount: boolean; readonly ctx: ActorCtx; readonly session: CurrentSession };
@@ -99,7 +122,24 @@ const BENCH = 'app/(workshop)/bench/actions.ts';
 const OWN = 'app/(workshop)/bench/account/actions.ts';
 const FACTOR = 'app/(workshop)/bench/account/second-factor/actions.ts';
 const DESK = 'app/(desk)/stewards/actions.ts';
+const TABLE = 'app/(desk)/sorting-table/actions.ts';
 const CHECK = 'app/(public)/check/actions.ts';
+const DOUBTS = 'app/(desk)/doubts/actions.ts';
+const KEEPING = 'app/(desk)/look-again/actions.ts';
+
+/** A sent amendment as its builder names it: its id, and that of a remark on it. */
+function amendmentOf(record: string): {
+  readonly id: AmendmentId;
+  readonly remark: string;
+  readonly version: number;
+  readonly key: string;
+} {
+  const [id = '', remark = record] = record.split(' ');
+  return { id: id as AmendmentId, remark, version: 2, key: key() };
+}
+
+/** Nobody decides about their own; what was never sent is not there. */
+const ofOthers = (other: string) => ({ own: 'own-amendment', other, none: 'not-found' });
 
 const SIGNED_OUT = 'begins or ends a session; the use case decides by password or mailed link';
 const BY_ADDRESS = 'whoever knows the address of 128 random bits may';
@@ -107,6 +147,7 @@ const PUBLIC_API = 'reads no cookie and knows no roles';
 
 /** Every server action and every handler of a route. One that is added has no row here, and a test says so. */
 export const DOORS: Readonly<Record<string, Door>> = {
+  ...DRAFT_DOORS,
   'app/theme.ts chooseTheme': { open: 'a cookie of one’s own browser' },
   [`${ACCOUNT} beginAccount`]: { open: SIGNED_OUT },
   [`${ACCOUNT} enterByPassword`]: { open: SIGNED_OUT },
@@ -211,6 +252,125 @@ export const DOORS: Readonly<Record<string, Door>> = {
     press: ({ ctx }, id) => retryParked(ctx, { key: key(), what: 'mail', id }),
     ends: { own: 'ok', other: 'ok', none: 'not-parked' },
   },
+  'app/(public)/rules/[id]/doubt/actions.ts raise': { open: 'anybody may doubt a rule; counted by address' },
+  [`${DOUBTS} answer`]: {
+    asks: 'doubt.answer',
+    record: () => aDoubt(),
+    press: ({ ctx }, id) => answerDoubt(ctx, { key: key(), id, answer: 'The order still stands.' }),
+    ends: { other: 'ok', none: 'not-found' },
+  },
+  [`${DOUBTS} setAside`]: {
+    asks: 'doubt.answer',
+    record: () => aDoubt(),
+    press: ({ ctx }, id) => setAsideDoubt(ctx, { key: key(), id, reason }),
+    ends: { other: 'ok', none: 'not-found' },
+  },
+  [`${DOUBTS} takeUp`]: {
+    asks: 'doubt.answer',
+    record: aSetAside,
+    press: ({ ctx }, id) => takeDoubtUp(ctx, { key: key(), id }),
+    ends: { own: 'ok', other: 'ok', none: 'not-found' },
+  },
+  [`${KEEPING} become`]: {
+    asks: 'sheet.keep',
+    record: aDoubtedPlace,
+    press: ({ ctx }, region) => becomeKeeper(ctx, { key: key(), region }),
+    ends: { other: 'ok', none: 'not-found' },
+  },
+  [`${KEEPING} stop`]: {
+    asks: 'sheet.keep',
+    record: aKept,
+    press: ({ ctx }, region) => stopKeeping(ctx, { key: key(), region }),
+    ends: { own: 'ok', other: 'ok, nothing', none: 'ok, nothing' },
+  },
+  [`${TABLE} tick`]: {
+    asks: 'amendment.judge',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id, version } = amendmentOf(record);
+      return tickClaim(ctx, { key: once, id, version, claim: 'rules/xa-mark#0', read: true });
+    },
+    ends: ofOthers('ok'),
+  },
+  [`${TABLE} remark`]: {
+    asks: 'amendment.judge',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id } = amendmentOf(record);
+      return addRemark(ctx, { key: once, id, line: 'text', words: 'tests' });
+    },
+    ends: ofOthers('ok'),
+  },
+  [`${TABLE} answer`]: {
+    // Its author answers too, as an editor: the tie to the amendment is tried in tests/db/amendments.test.ts.
+    asks: 'amendment.write',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id, remark } = amendmentOf(record);
+      return answerRemark(ctx, { key: once, id, remark, words: 'tests' });
+    },
+    ends: { own: 'ok', none: 'not-found' },
+  },
+  [`${TABLE} mark`]: {
+    asks: 'amendment.judge',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id, remark } = amendmentOf(record);
+      return markRemark(ctx, { key: once, id, remark, answered: true });
+    },
+    ends: ofOthers('ok'),
+  },
+  [`${TABLE} hold`]: {
+    asks: 'amendment.judge',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id, version } = amendmentOf(record);
+      return holdAmendment(ctx, { key: once, id, version, reason });
+    },
+    ends: ofOthers('ok'),
+  },
+  [`${TABLE} release`]: {
+    asks: 'amendment.judge',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id, version } = amendmentOf(record);
+      return releaseAmendment(ctx, { key: once, id, version });
+    },
+    ends: ofOthers('already-decided'),
+  },
+  [`${TABLE} sendBack`]: {
+    asks: 'amendment.judge',
+    record: aSentAmendment,
+    press: ({ ctx }, record) => {
+      const { key: once, id, version } = amendmentOf(record);
+      return sendBackAmendment(ctx, { key: once, id, version, reason });
+    },
+    ends: ofOthers('ok'),
+  },
+  ...Object.fromEntries(
+    ['approve', 'giveBack'].map((name) => [
+      `${TABLE} ${name}`,
+      {
+        asks: 'amendment.judge' as const,
+        record: aSentAmendment,
+        press: ({ ctx }: Presser, record: string) => {
+          const { key: once, id, version } = amendmentOf(record);
+          return approveAmendment(ctx, { key: once, id, version });
+        },
+        ends: ofOthers('not-all-read'),
+      },
+    ]),
+  ),
+  'app/api/sorting-table/route.ts GET': {
+    asks: 'amendment.judge',
+    press: ({ ctx }) => waitingStamp(ctx, {}),
+    ends: { own: 'ok, nothing' },
+  },
+  'app/(public)/regions/[code]/editions/withdraw/actions.ts withdraw': {
+    asks: 'edition.withdraw',
+    press: ({ ctx }) => withdrawEdition(ctx, { key: key(), region: 'zz', number: 2, reason }),
+    ends: { own: 'not-found' },
+  },
   'app/(public)/readings/actions.ts keepReadings': { open: BY_ADDRESS },
   'app/(public)/regions/wishes/actions.ts wish': { open: 'anybody may ask for a region; counted by address' },
   [`${CHECK} begin`]: { open: BY_ADDRESS },
@@ -224,6 +384,18 @@ export const DOORS: Readonly<Record<string, Door>> = {
     record: anArchive,
     press: ({ ctx }, id) => readArchive(ctx, id),
     ends: { own: 'ok, nothing', other: 'not-found', none: 'not-found' },
+  },
+  'app/api/files/route.ts POST': {
+    asks: 'file.keep',
+    press: ({ ctx }) => keepPageSeen(ctx, { key: key(), name: 'page.txt', body: [Buffer.from('tests')], declaredBytes: 5 }),
+    ends: itself,
+  },
+  'app/api/files/[id]/route.ts GET': {
+    // Whose file an editor, a moderator may read besides their own is tried in tests/db/files.test.ts.
+    asks: 'file.read',
+    record: async (whose) => (await aKeptFile(whose)).id,
+    press: ({ ctx }, id) => readFile(ctx, id as FileId),
+    ends: { own: 'ok, nothing', none: 'not-found' },
   },
   'app/api/health/route.ts GET': { open: PUBLIC_API },
   'app/api/v1/checks/route.ts POST': { open: PUBLIC_API },

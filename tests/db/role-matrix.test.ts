@@ -31,6 +31,8 @@ const TABLES = [
   'outbox',
   'jobs',
   'day_book',
+  'doubts',
+  'keepers',
 ];
 const CHECKSUMS = 'CHECKSUM TABLE '.concat(TABLES.map(() => '??').join(', '));
 

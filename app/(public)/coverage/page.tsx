@@ -19,6 +19,9 @@ export default async function CoveragePage(): Promise<ReactElement> {
       <p className="mt-2">
         <a href="/regions">{words('coverage.find')}</a>
       </p>
+      <p>
+        <a href="/regions/new">{words('amend.newPlace.link')}</a>
+      </p>
       <CoverageMap countries={countries} shapes={shapes} size={MAP_SIZE} />
       <p className="mt-2 max-w-text text-small text-umber">{words('coverage.licence')}</p>
       <CoverageLegend countries={countries} />

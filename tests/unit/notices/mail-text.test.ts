@@ -22,6 +22,7 @@ const EXAMPLES: MailValues = {
   'role-changed': { name: 'Mira', link, role: 'editor', reason: 'Knows the Danish rules.\nAsked for it.' },
   'role-answer': { name: 'Mira', link, answer: 'refused', reason: 'Tell us more about your sources.' },
   'account-leaving': { name: 'Mira', link, on: '15 December 2026' },
+  'amendment-decided': { name: 'Mira', link, answer: 'used', place: 'Denmark', edition: '4', reason: 'Mugs are named.' },
   'account-closed': { name: 'Mira', link, reason: 'Asked for by mail.' },
   'account-reopened': { name: 'Mira', link, reason: 'Asked for by mail.' },
   'someone-tried-to-sign-up': { name: 'Mira', link, resetLink: 'https://footring.example.test/reset' },

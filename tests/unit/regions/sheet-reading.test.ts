@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { parseCalendarDate, type CalendarDate } from '@/lib/kernel/calendar-date';
-import { citeSources } from '@/lib/regions/domain/cited-sources';
+import { alikeTogether, citeSources } from '@/lib/regions/domain/cited-sources';
 import { lifeOn, sayDates } from '@/lib/regions/domain/rule-dates';
 import { contactsOf, splitText } from '@/lib/regions/domain/sheet-reading';
 import type { ToldSource } from '@/lib/regions/domain/told-rule';
@@ -52,4 +52,32 @@ test('a text that is cited in several places has one number', () => {
     [2, 'B'],
   ]);
   expect(numberOf(cited('A', '9'))).toBe(1);
+});
+
+test('citations that differ in their place alone stand together; another standing, evidence or passage keeps them apart', () => {
+  const cited = (title: string, more: Partial<ToldSource>): ToldSource => ({
+    title,
+    publisher: 'P',
+    standing: 'law',
+    evidence: 'read',
+    ...more,
+  });
+  const all = [
+    cited('A', { locator: 'Art. 1' }),
+    cited('B', { locator: 'Art. 1' }),
+    cited('A', { locator: 'Art. 2' }),
+    cited('A', { locator: 'Art. 3', evidence: 'memory' }),
+    cited('A', { locator: 'Art. 4', standing: 'guidance' }),
+    cited('A', { locator: 'Art. 5', passage: 'Each piece' }),
+    cited('A', {}),
+  ];
+  const together = alikeTogether(all);
+  expect(together.map(({ title, locator }) => [title, locator])).toEqual([
+    ['A', 'Art. 1; Art. 2'],
+    ['B', 'Art. 1'],
+    ['A', 'Art. 3'],
+    ['A', 'Art. 4'],
+    ['A', 'Art. 5'],
+    ['A', undefined],
+  ]);
 });
