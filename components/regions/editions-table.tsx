@@ -10,6 +10,7 @@ type Edition = {
   readonly inUseTo: string | null;
   readonly hash: string;
   readonly summary: string;
+  readonly withdrawn: { readonly reason: string; readonly broughtBackAs: number } | null;
 };
 
 type Props = { readonly sheet: { readonly code: string; readonly name: string }; readonly editions: readonly Edition[] };
@@ -29,13 +30,13 @@ export function EditionsTable({ sheet, editions }: Props): ReactElement {
       id="editions"
       caption={words('regions.editions.caption', { name: sheet.name })}
       columns={COLUMNS}
-      rows={editions.toReversed().map(({ number, inUseFrom, inUseTo, hash, summary }) => ({
+      rows={editions.toReversed().map(({ number, inUseFrom, inUseTo, hash, summary, withdrawn }) => ({
         id: String(number),
         cells: {
           number: <a href={`/regions/${sheet.code}/editions/${String(number)}`}>{words('regions.editions.link', { number })}</a>,
           from: <Instant at={inUseFrom} />,
           to: inUseTo === null ? words('regions.editions.now') : <Instant at={inUseTo} />,
-          summary: <Summary code={sheet.code} number={number} summary={summary} />,
+          summary: <Summary code={sheet.code} number={number} summary={summary} withdrawn={withdrawn} />,
           hash: <code className="break-all text-small">{hash}</code>,
         },
       }))}
@@ -43,15 +44,16 @@ export function EditionsTable({ sheet, editions }: Props): ReactElement {
   );
 }
 
-type SummaryProps = Pick<Edition, 'number' | 'summary'> & { readonly code: string };
+type SummaryProps = Pick<Edition, 'number' | 'summary' | 'withdrawn'> & { readonly code: string };
 
-/** What an edition is, and what it changed. */
-function Summary({ code, number, summary }: SummaryProps): ReactElement {
+/** What an edition is, what it changed, and why it was withdrawn if it was. */
+function Summary({ code, number, summary, withdrawn }: SummaryProps): ReactElement {
   if (number === 1) return <>{summary}</>;
   const address = `/regions/${code}/editions/compare?from=${String(number - 1)}&to=${String(number)}`;
   return (
     <>
-      {summary}{' '}
+      {summary}
+      {withdrawn === null ? null : <span className="mt-2 block">{words('regions.editions.withdrawn', withdrawn)}</span>}{' '}
       <a href={address} aria-label={words('editions.linkOf', { number })} className="block">
         {words('editions.link')}
       </a>

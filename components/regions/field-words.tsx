@@ -69,9 +69,10 @@ export function FieldWords({ value, names }: Props): ReactElement {
   }
 }
 
-/** A rule by its title, leading to its page. */
+/** A rule by its title, leading to its page where it has one. */
 export function RuleLink({ id, names }: { readonly id: string; readonly names: ComparedNames }): ReactElement {
-  return <a href={`/rules/${id}`}>{names.rules.get(id) ?? id}</a>;
+  const title = names.rules.get(id) ?? id;
+  return names.proposed?.has(id) === true ? <>{title}</> : <a href={`/rules/${id}`}>{title}</a>;
 }
 
 function Lines({ items }: { readonly items: readonly (readonly [key: string, said: ReactNode])[] }): ReactElement {

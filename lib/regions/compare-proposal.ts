@@ -1,11 +1,12 @@
 import 'server-only';
 import { fingerprint } from '@/db/fingerprint';
+import type { Edition } from '@/db/rows/edition-row';
 import { calendarDateOf } from '@/lib/kernel/calendar-date';
 import { canonicalJson } from '@/lib/kernel/canonical-json';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { Ctx } from '@/lib/server/ctx';
 import { readEdition } from '@/lib/server/sheets';
-import { compareSheets } from './compare-sheets';
+import { compareSheets, type Version } from './compare-sheets';
 import type { ComparedEditions } from './domain/compared-editions';
 import type { Sheet } from './domain/sheet';
 
@@ -29,8 +30,14 @@ export async function compareProposal(
     sheet: document,
     hash: fingerprint(canonicalJson(document)),
   };
-  if (before === null) return ok(await compareSheets(ctx, { before, after, on: calendarDateOf(ctx.now) }));
-  const { number, inUseFrom, sheet, hash } = before;
-  const head = { number, summary: before.summary, inUseFrom };
-  return ok(await compareSheets(ctx, { before: { head, sheet, hash }, after, on: calendarDateOf(ctx.now) }));
+  const compared = await compareSheets(ctx, { before: versionOf(before), after, on: calendarDateOf(ctx.now) });
+  const known = new Set(before?.sheet.rules.map(({ id }) => id));
+  const proposed = new Set(document.rules.map(({ id }) => id).filter((id) => !known.has(id)));
+  return ok({ ...compared, names: { ...compared.names, proposed } });
 }
+
+const versionOf = (edition: Edition | null): Version | null => {
+  if (edition === null) return null;
+  const { number, summary, inUseFrom, sheet, hash } = edition;
+  return { head: { number, summary, inUseFrom }, sheet, hash };
+};

@@ -1,4 +1,5 @@
 import 'server-only';
+import { listWithdrawals } from '@/db/edition-withdrawals';
 import { listEditions } from '@/db/editions';
 import { listMemberships } from '@/db/regions';
 import { calendarDateOf } from '@/lib/kernel/calendar-date';
@@ -10,7 +11,13 @@ import { regionLine } from './domain/line';
 import { tellLayer, type RegionSheet } from './domain/told-sheet';
 
 /** One edition of a sheet by itself, without the layers above it, as of its last day in use. */
-export type NumberedEdition = { readonly sheet: RegionSheet; /** Null while it is in use. */ readonly inUseTo: Date | null };
+export type NumberedEdition = {
+  readonly sheet: RegionSheet;
+  /** Null while it is in use. */
+  readonly inUseTo: Date | null;
+  /** Why it was withdrawn, and as what the one before it came back; null for one that was not. */
+  readonly withdrawn: { readonly reason: string; readonly broughtBackAs: number } | null;
+};
 
 /** The edition of that number, whether in use or not. */
 export async function readEdition(
@@ -26,5 +33,7 @@ export async function readEdition(
   const layer = tellLayer(edition, on);
   const sources = layer.rules.flatMap((rule) => rule.sources);
   const caution = cautionFor({ sources, authorities: [layer.authorities], on });
-  return ok({ sheet: { ...layer, on, line, notInherited: [], above: [], caution }, inUseTo });
+  const withdrawal = (await listWithdrawals(ctx.db, input.code)).find(({ number }) => number === input.number);
+  const withdrawn = withdrawal === undefined ? null : { reason: withdrawal.reason, broughtBackAs: withdrawal.broughtBackAs };
+  return ok({ sheet: { ...layer, on, line, notInherited: [], above: [], caution }, inUseTo, withdrawn });
 }

@@ -13,10 +13,12 @@ import { checkDraft } from '@/lib/regions/check-draft';
 import type { Sheet } from '@/lib/regions/domain/sheet';
 import { keepEntry } from '@/lib/regions/keep-entry';
 import { holdAmendment } from '@/lib/regions/hold-amendment';
+import { listEditions } from '@/lib/regions/list-editions';
 import { listOwnAmendments } from '@/lib/regions/list-own-amendments';
 import { listWaiting } from '@/lib/regions/list-waiting';
 import { openForReview } from '@/lib/regions/open-for-review';
 import { readDraft } from '@/lib/regions/read-draft';
+import { readEdition } from '@/lib/regions/read-edition';
 import { releaseAmendment } from '@/lib/regions/release-amendment';
 import { reopenAmendment } from '@/lib/regions/reopen-amendment';
 import { sendAmendment } from '@/lib/regions/send-amendment';
@@ -219,6 +221,15 @@ test('REG-58 withdrawing brings back the last edition that was not withdrawn, wi
   expect(await findEdition(db, region, 4)).toMatchObject({ origin: 'withdrawal', sheet: { text: 'Second.', name: `Land of ${region}` } });
   expect((await listMemberships(db)).get(region)).toBeUndefined();
   expect((await listRegions(db)).find(({ code }) => code === region)?.name).toBe(`Land of ${region}`);
+  const listed = value(await listEditions(mo, region)).map(({ number, withdrawn }) => [number, withdrawn]);
+  const withdrawn = { reason: 'It rests on a draft of the order.', broughtBackAs: 4 };
+  expect(listed).toEqual([
+    [1, null],
+    [2, null],
+    [3, withdrawn],
+    [4, null],
+  ]);
+  expect(value(await readEdition(mo, { code: region, number: 3 })).withdrawn).toEqual(withdrawn);
   expect(await withdraw(4)).toEqual(refusal('nothing-before'));
   expect(
     await db('day_book')

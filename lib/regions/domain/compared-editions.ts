@@ -10,7 +10,11 @@ import type { SheetNames } from './sheet-names';
 export type LineMeanings = Result<readonly RuleMeaning[], CompileFault>;
 
 /** Names for all ids in a comparison: rules, terms and places, by both versions and the layers around them. */
-export type ComparedNames = SheetNames & { readonly rules: ReadonlyMap<string, string> };
+export type ComparedNames = SheetNames & {
+  readonly rules: ReadonlyMap<string, string>;
+  /** Rules that are only proposed: they have no page yet. */
+  readonly proposed?: ReadonlySet<string>;
+};
 
 /** An edition as far as its head tells of it. */
 export type ComparedEdition = { readonly number: number; readonly summary: string; readonly inUseFrom: Date };

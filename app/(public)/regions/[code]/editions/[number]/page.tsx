@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { cache, type ReactElement } from 'react';
+import { Panel } from '@/components/ui/panel';
 import { calendarDateOf } from '@/lib/kernel/calendar-date';
 import { words } from '@/lib/kernel/words';
 import { readEdition, type NumberedEdition } from '@/lib/regions/read-edition';
@@ -28,5 +29,19 @@ export default async function EditionPage({ params }: Props): Promise<ReactEleme
   const { code, number } = await params;
   const found = await findEdition(code, number);
   if (found === null) notFound();
-  return drawSheet(found.sheet, { edition: { inUseTo: found.inUseTo === null ? null : calendarDateOf(found.inUseTo) } });
+  const { sheet, inUseTo, withdrawn } = found;
+  return (
+    <>
+      {withdrawn === null ? null : <Withdrawn said={words('regions.editions.withdrawn', withdrawn)} />}
+      {drawSheet(sheet, { edition: { inUseTo: inUseTo === null ? null : calendarDateOf(inUseTo) } })}
+    </>
+  );
 }
+
+const Withdrawn = ({ said }: { readonly said: string }): ReactElement => (
+  <div className="mb-6">
+    <Panel colour="ash">
+      <p>{said}</p>
+    </Panel>
+  </div>
+);
