@@ -6,6 +6,9 @@ export const SITE = process.env['FOOTRING_SITE'] ?? 'http://localhost:3000';
 /** Whether pages are looked at in every width and theme there is, as `npm run test:long` does. */
 export const EVERY_LOOK = process.env['FOOTRING_EVERY_WIDTH'] === 'yes';
 
+/** With script and without; where both go the same way, `npm test` goes the harder one, without. */
+export const WITH_SCRIPT: readonly boolean[] = EVERY_LOOK ? [true, false] : [false];
+
 /** Widths in CSS pixels at which axe looks at pages: the narrowest each time, all of them when every look is asked for. */
 export const WIDTHS: readonly number[] = EVERY_LOOK ? [320, 1280] : [320];
 

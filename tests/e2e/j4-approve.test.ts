@@ -1,4 +1,3 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
 import { db } from '@/db/connection';
@@ -9,7 +8,8 @@ import type { Sheet } from '@/lib/regions/domain/sheet';
 import { sendChanged } from '../builders/sent-amendments';
 import { startSiteProcess, type SiteProcess } from '../builders/site-process';
 import { aRule, aSource } from '../builders/small-world';
-import { openBrowser, SITE, visit, WIDTHS } from './browser';
+import { faultsOf } from './axe';
+import { openBrowser, SITE, visit } from './browser';
 import { aPerson, cookieOf, visitAs, type Person } from './signed-in';
 
 let browser: Browser;
@@ -312,8 +312,6 @@ test('W9 an amendment is ticked, remarked on and approved by keyboard alone', as
   await page.waitForURL(/done=in-use/);
 }, 200_000);
 
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-
 test('W1 W7 light and dark: axe finds nothing on the moderators’ pages, and none scrolls sideways', async () => {
   const [id, over] = [await markedIn('hu', 'hu-axe'), await markedIn('hu', 'hu-stale')];
   const setup = await (await visitAs(browser, moderator)).newPage();
@@ -335,25 +333,8 @@ test('W1 W7 light and dark: axe finds nothing on the moderators’ pages, and no
     '/regions/hu/editions/withdraw',
     '/bench',
   ];
-  const faults: unknown[] = [];
-  for (const width of WIDTHS) {
-    const page = await (await visitAs(browser, moderator, { width })).newPage();
-    for (const path of paths) {
-      for (const colorScheme of ['light', 'dark'] as const) {
-        await page.emulateMedia({ colorScheme });
-        if (colorScheme === 'light') await page.goto(path);
-        const axe = new AxeBuilder({ page });
-        const { violations } = await (colorScheme === 'light' ? axe.withTags(TAGS) : axe.withRules(['color-contrast'])).analyze();
-        faults.push(
-          ...violations.map(({ id: rule, nodes }) => ({ path, width, colorScheme, rule, at: nodes.slice(0, 3).map(({ html }) => html) })),
-        );
-      }
-      const wider = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
-      if (wider > 0) faults.push({ path, width, wider });
-    }
-    await page.context().close();
-  }
-  expect(faults).toEqual([]);
+  const open = async (width: number): Promise<Page> => (await visitAs(browser, moderator, { width })).newPage();
+  expect(await faultsOf(open, paths)).toEqual([]);
 }, 900_000);
 
 test('D8 at 1280 px a claim and its source stand side by side, at 320 px the claim comes first', async () => {

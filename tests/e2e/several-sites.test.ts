@@ -104,7 +104,7 @@ test('S55 nothing is served that is not meant for readers', async () => {
   expect(scripts.length).toBeGreaterThan(0);
   for (const place of new Set(scripts)) expect((await fetch(`${SITE}${place}.map`)).status, place).toBe(404);
   const health: unknown = await (await fetch(`${SITE}/api/health`)).json();
-  expect(Object.keys(health as object).sort()).toEqual(['database', 'mail', 'status', 'version', 'worker']);
+  expect(Object.keys(health as object).sort()).toEqual(['database', 'mail', 'status', 'store', 'version', 'worker']);
 });
 
 test('S51 no secret of the settings is in what browsers are given, and none is named for them', async () => {

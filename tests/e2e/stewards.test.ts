@@ -6,7 +6,7 @@ import { inTransaction } from '@/db/transaction';
 import { ok } from '@/lib/kernel/result';
 import { nextMail } from '../builders/mailbox';
 import { faultsOf } from './axe';
-import { openBrowser, SITE, visit } from './browser';
+import { openBrowser, SITE, visit, WITH_SCRIPT } from './browser';
 import { aPerson, cookieOf, signIn, visitAs, type Person } from './signed-in';
 
 let browser: Browser;
@@ -31,7 +31,7 @@ async function changeRole(page: Page, person: Person, role: string, reason: stri
   await page.waitForURL(/done=role/);
 }
 
-describe.each([true, false])('with script: %s', (script) => {
+describe.each(WITH_SCRIPT)('with script: %s', (script) => {
   test('ROL-5 S17 a role granted and taken while signed in takes hold at the next request, in another browser', async () => {
     const maker = await aPerson('maker');
     const desk = await (await visitAs(browser, steward, { script })).newPage();

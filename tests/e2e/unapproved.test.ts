@@ -17,6 +17,8 @@ const NOT_IN_USE: readonly AmendmentState[] = ['draft', 'sent', 'held', 'sent-ba
 
 const canary = `canary${randomUUID().slice(0, 8)}`;
 const rule = `${REGION}-${canary}`;
+/** Not of the canary: the page that finds nothing says back what was asked for. */
+const text = `text-${randomUUID().slice(0, 8)}`;
 
 /** One amendment in each state that is not in use, with the canary in every text of it. */
 async function amendments(): Promise<readonly AmendmentId[]> {
@@ -25,8 +27,8 @@ async function amendments(): Promise<readonly AmendmentId[]> {
   if (base === null) throw new Error(`There is no sheet of ${REGION}`);
   const { sheet } = base;
   const told = { region: REGION, title: canary, says: `Ask about ${canary}.`, note: canary };
-  const source = { id: canary, title: canary, publisher: canary };
-  const cited = [{ source: canary, locator: canary, passage: canary, passageLang: 'fr', standing: 'guidance', evidence: 'read' }] as const;
+  const source = { id: text, title: canary, publisher: canary };
+  const cited = [{ source: text, locator: canary, passage: canary, passageLang: 'fr', standing: 'guidance', evidence: 'read' }] as const;
   const document = {
     ...sheet,
     text: `${sheet.text}\n\n${canary}`,
@@ -44,7 +46,7 @@ const PUBLIC = [
   `/regions/${REGION}/editions`,
   `/regions/${REGION}/editions/compare`,
   `/rules/${rule}`,
-  `/sources/${canary}`,
+  `/sources/${text}`,
   `/sources?region=${REGION}`,
   '/changes',
   '/coverage',
@@ -82,14 +84,14 @@ test('S28 what is not in use is on no page, in no answer and in no search, for r
   for (const cookie of cookies) {
     for (const path of [...PUBLIC, ...own, ...ids.map((id) => `/sorting-table/${id}`)]) {
       // An address that does not exist may be said back; what it would hold may not.
-      const answers = (await answersAt(path, cookie)).map((text) => text.replaceAll(path, '').replaceAll(encodeURIComponent(path), ''));
-      if (answers.some((text) => text.replaceAll(rule, '').includes(canary))) found.push(path);
+      const answers = (await answersAt(path, cookie)).map((answer) => answer.replaceAll(path, '').replaceAll(encodeURIComponent(path), ''));
+      if (answers.some((answer) => answer.replaceAll(rule, '').includes(canary))) found.push(path);
     }
     for (const path of ECHOING) {
       const nothing = canary.replace('canary', 'nobody');
       const [asked, unknown] = [await answersAt(path + canary, cookie), await answersAt(path + nothing, cookie)];
-      const links = (text: string): number => text.split(rule).length + text.split(`Ask about ${canary}`).length;
-      if (asked.some((text, at) => links(text) !== links(unknown[at] ?? ''))) found.push(path);
+      const links = (answer: string): number => answer.split(rule).length + answer.split(`Ask about ${canary}`).length;
+      if (asked.some((answer, at) => links(answer) !== links(unknown[at] ?? ''))) found.push(path);
     }
   }
   expect(found).toEqual([]);
