@@ -36,7 +36,7 @@ export function begin(command, args, { as, env = {}, output = 'inherit', patienc
 }
 
 /** Runs a program to its end. Its output goes to `log` when one is named, else to the terminal. Answers with its exit code. */
-export async function run(command, args, { log, limitMs = 20 * 60_000, ...options } = {}) {
+export async function run(command, args, { log, limitMs = 40 * 60_000, ...options } = {}) {
   const output = log === undefined ? 'inherit' : openSync(log, 'w', 0o600);
   const started = begin(command, args, { ...options, output });
   if (log !== undefined) closeSync(output);

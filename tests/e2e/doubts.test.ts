@@ -2,7 +2,7 @@ import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { db } from '@/db/connection';
 import { faultsOf } from './axe';
-import { openBrowser, SITE, visit } from './browser';
+import { openBrowser, SITE, visit, WITH_SCRIPT } from './browser';
 import { aPerson, cookieOf, visitAs, type Person } from './signed-in';
 
 let browser: Browser;
@@ -41,7 +41,7 @@ async function sendPatiently(page: Page, typed: string): Promise<number> {
   throw new Error('The form was never taken');
 }
 
-describe.each([true, false])('with script: %s', (script) => {
+describe.each(WITH_SCRIPT)('with script: %s', (script) => {
   test('R2 REG-80 REG-81 a reader doubts a rule, an editor answers, and both stand on the rule from then on alone', async () => {
     const reader = await (await visit(browser, { script, width: 320 })).newPage();
     await reader.goto(RULE);

@@ -1,6 +1,6 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { answerPage, carryOn, checkBriefly, checkPiece, MUG, openBrowser, SITE, visit } from './browser';
+import { answerPage, carryOn, checkBriefly, checkPiece, MUG, openBrowser, SITE, visit, WITH_SCRIPT } from './browser';
 
 let browser: Browser;
 beforeAll(async () => {
@@ -42,7 +42,9 @@ describe.each([
     expect(await page.locator('#us-ca-rule-us-ca-pb-cups').innerText()).toMatch(/Applies/);
     expect(await page.locator('#us-ca-rule-us-ca-name-mark').innerText()).toMatch(/Applies/);
   });
+});
 
+describe.each(WITH_SCRIPT)('J1 with script: %s', (script) => {
   test('the page and the API give the same lines for the same answers', async () => {
     const page = await (await visit(browser, { script })).newPage();
     const said = {

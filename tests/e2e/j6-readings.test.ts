@@ -1,6 +1,6 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { choosePlace, openBrowser, visit } from './browser';
+import { choosePlace, openBrowser, visit, WITH_SCRIPT } from './browser';
 
 let browser: Browser;
 beforeAll(async () => {
@@ -40,10 +40,7 @@ async function describeMug(page: Page): Promise<void> {
 
 const cell = (page: Page, column: string, row: number) => page.locator(`[name="readings.${column}.${String(row)}"]`);
 
-describe.each([
-  ['with script', true],
-  ['without script', false],
-])('J6 %s', (_, script) => {
+describe.each(WITH_SCRIPT)('J6 with script: %s', (script) => {
   test('a maker types a report and sees it held against three places, with chart, caution and whom to ask', async () => {
     const page = await (await visit(browser, { script })).newPage();
     await page.goto('/');
