@@ -50,7 +50,7 @@ const FAR_IN = /^[ \t]{80}/m;
 
 /** How much of this a text may hold: many times what people write, and little enough that parsing it is quick. */
 const MOST: readonly (readonly [what: RegExp, times: number])[] = [
-  [/\n|\r/g, 1000],
+  [/\n|\r/g, 600],
   [/[[\]()`*_~<>&\\|#!:@]/g, 2000],
   // A heading by the line under it: each one looks through all that came before.
   [/^[ \t>]{0,12}(?:=+|-+)[ \t]*$/gm, 40],
