@@ -13,7 +13,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { writeMail } from '@/lib/server/mail-text';
 import type { Account } from './domain/account';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { judgeRoleChange, type RoleChangeRefusal } from './domain/role-change';
 import { holdStewards } from './hold-stewards';
 import type { AnswerInput } from './steward-schema';
@@ -25,7 +25,7 @@ export type AnswerRefusal = AccessRefusal | ChangeRefusal | RoleChangeRefusal | 
  * and how. Granting it is a change of role like any other.
  */
 export async function answerRequest(ctx: ActorCtx, input: AnswerInput): Promise<Result<null, AnswerRefusal>> {
-  const own = askOwn(ctx, 'role.answer');
+  const own = askSignedIn(ctx, 'role.answer');
   if (!own.ok) return own;
   const { key, id, answer, said } = input;
   const asked = { key, who: own.value.id, act: 'accounts.answer-request', input: { id, answer, said } };

@@ -7,7 +7,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { take } from '@/lib/server/limits';
 import { writeMail } from '@/lib/server/mail-text';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mailToken } from './mailed-token';
 import type { AddressInput } from './schema';
 
@@ -18,7 +18,7 @@ export type AddressRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 's
  * is told instead, and whoever asked sees no difference.
  */
 export async function askAddressChange(ctx: ActorCtx, { key, email }: AddressInput): Promise<Result<null, AddressRefusal>> {
-  const own = askOwn(ctx, 'account.change-address');
+  const own = askSignedIn(ctx, 'account.change-address');
   if (!own.ok) return own;
   const { id } = own.value;
   const mayMail = (await take('link-mail', email, ctx)).ok && (await take('link-mail', id, ctx)).ok;

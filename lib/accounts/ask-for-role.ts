@@ -7,7 +7,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { newId } from '@/lib/server/new-id';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { RoleAskInput } from './schema';
 
 export type RoleAskRefusal =
@@ -18,7 +18,7 @@ export async function askForRole(
   ctx: ActorCtx,
   { key, why, regions }: RoleAskInput,
 ): Promise<Result<{ readonly id: string }, RoleAskRefusal>> {
-  const own = askOwn(ctx, 'role.ask');
+  const own = askSignedIn(ctx, 'role.ask');
   if (!own.ok) return own;
   const { id: accountId } = own.value;
   const known = new Set((await listRegions(ctx.db)).map(({ code }) => code));

@@ -4,7 +4,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { EXPORT_JOB } from './domain/export';
 import type { KeyInput } from './schema';
 
@@ -13,7 +13,7 @@ export async function beginExport(
   ctx: ActorCtx,
   { key }: KeyInput,
 ): Promise<Result<{ readonly id: string }, AccessRefusal | ChangeRefusal>> {
-  const own = askOwn(ctx, 'account.export');
+  const own = askSignedIn(ctx, 'account.export');
   if (!own.ok) return own;
   const { id: accountId } = own.value;
   return change(ctx, { key, who: accountId, act: 'accounts.export', input: null }, async (trx) => {

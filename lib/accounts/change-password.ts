@@ -12,7 +12,7 @@ import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { TooMany } from '@/lib/server/limits';
 import { writeMail } from '@/lib/server/mail-text';
 import { newSession, type CurrentSession } from '@/lib/server/session';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { hashNewPassword, type PasswordRefusal } from './new-password';
 import { provePassword } from './prove-password';
 import type { PasswordInput } from './schema';
@@ -26,7 +26,7 @@ export async function changePassword(
   session: CurrentSession,
   agent: string,
 ): Promise<Result<{ readonly sid: string }, PasswordChangeRefusal>> {
-  const own = askOwn(ctx, 'account.change-password');
+  const own = askSignedIn(ctx, 'account.change-password');
   if (!own.ok) return own;
   const { id } = own.value;
   const before = await findAccount(ctx.db, id);

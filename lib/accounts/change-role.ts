@@ -8,7 +8,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { writeMail } from '@/lib/server/mail-text';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { namesPerson } from './domain/public-reason';
 import { judgeRoleChange, type RoleChange, type RoleChangeRefusal } from './domain/role-change';
 import { holdStewards } from './hold-stewards';
@@ -22,7 +22,7 @@ type Changed = { readonly id: string; readonly change: RoleChange };
  * mail with the reason, and the day book a line.
  */
 export async function changeRole(ctx: ActorCtx, input: RoleChangeInput): Promise<Result<Changed, ChangeRoleRefusal>> {
-  const own = askOwn(ctx, 'role.grant');
+  const own = askSignedIn(ctx, 'role.grant');
   if (!own.ok) return own;
   const { key, id, from, role, reason } = input;
   const asked = { key, who: own.value.id, act: 'accounts.change-role', input: { id, from, role, reason } };

@@ -12,7 +12,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { writeMail } from '@/lib/server/mail-text';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { namesPerson } from './domain/public-reason';
 import { judgeClosing, type ClosingRefusal } from './domain/role-change';
 import { holdStewards } from './hold-stewards';
@@ -22,7 +22,7 @@ export type CloseRefusal = AccessRefusal | ChangeRefusal | ClosingRefusal | { re
 
 /** Shuts a person out: their sessions and mailed links end, and they get a mail with the reason. Nothing of theirs is deleted. */
 export async function closeAccount(ctx: ActorCtx, input: ClosingInput): Promise<Result<null, CloseRefusal>> {
-  const own = askOwn(ctx, 'account.close');
+  const own = askSignedIn(ctx, 'account.close');
   if (!own.ok) return own;
   const { key, id, reason } = input;
   const asked = { key, who: own.value.id, act: 'accounts.close', input: { id, reason } };

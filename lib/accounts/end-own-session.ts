@@ -5,7 +5,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { handleOf } from '@/lib/server/token';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { earlier, IDLE_MS } from './domain/session-age';
 import type { SessionInput } from './schema';
 
@@ -13,7 +13,7 @@ const MOST = 100;
 
 /** Ends one of one's own sessions. One that is over already, or was never there, is over. */
 export async function endOwnSession(ctx: ActorCtx, { handle }: SessionInput): Promise<Result<null, AccessRefusal>> {
-  const own = askOwn(ctx, 'account.end-session');
+  const own = askSignedIn(ctx, 'account.end-session');
   if (!own.ok) return own;
   const { id: accountId } = own.value;
   const lines = await listSessions(ctx.db, { accountId, now: ctx.now, idleSince: earlier(ctx.now, IDLE_MS) }, MOST);

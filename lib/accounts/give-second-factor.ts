@@ -12,7 +12,7 @@ import { newSession, type CurrentSession } from '@/lib/server/session';
 import type { Account } from './domain/account';
 import { usableStep } from './domain/one-time-step';
 import { CODE_LENGTH, readRecoveryCode } from './domain/recovery-code';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mailFactorChange } from './mail-factor-change';
 import type { CodeInput } from './schema';
 
@@ -28,7 +28,7 @@ export async function giveSecondFactor(
   session: CurrentSession,
   agent: string,
 ): Promise<Result<{ readonly sid: string }, CodeRefusal>> {
-  const own = askOwn(ctx, 'account.give-second-factor');
+  const own = askSignedIn(ctx, 'account.give-second-factor');
   if (!own.ok) return own;
   const { id } = own.value;
   const taken = await take('sign-in-account', `second factor ${id}`, ctx);

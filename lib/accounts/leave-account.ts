@@ -10,7 +10,7 @@ import { sayDate } from '@/lib/kernel/say';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { writeMail } from '@/lib/server/mail-text';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { GRACE_MS, later } from './domain/session-age';
 import type { KeyInput } from './schema';
 
@@ -18,7 +18,7 @@ export type LeaveRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'las
 
 /** Begins the 14 days after which a person is forgotten. Every session ends; signing in again leads to "Keep my account". */
 export async function leaveAccount(ctx: ActorCtx, { key }: KeyInput): Promise<Result<null, LeaveRefusal>> {
-  const own = askOwn(ctx, 'account.leave');
+  const own = askSignedIn(ctx, 'account.leave');
   if (!own.ok) return own;
   const { id, role } = own.value;
   return change(ctx, { key, who: id, act: 'accounts.leave', input: null }, async (trx): Promise<Result<null, LeaveRefusal>> => {

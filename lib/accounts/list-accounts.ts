@@ -3,7 +3,7 @@ import { searchAccounts } from '@/db/account-search';
 import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { Account } from './domain/account';
 import type { AccountSearch } from './steward-schema';
 
@@ -17,7 +17,7 @@ export type FoundAccounts = {
 
 /** Accounts by a part of their name or address, for stewards: the newest first, fifty at a time. */
 export async function listAccounts(ctx: ActorCtx, { q, role, after }: AccountSearch): Promise<Result<FoundAccounts, AccessRefusal>> {
-  const own = askOwn(ctx, 'account.look-up');
+  const own = askSignedIn(ctx, 'account.look-up');
   if (!own.ok) return own;
   const found = await searchAccounts(ctx.db, { words: q, role, after, limit: AT_A_TIME + 1 });
   const accounts = found.slice(0, AT_A_TIME);

@@ -4,7 +4,7 @@ import { findRoleRequest, listWaitingRoleRequests } from '@/db/role-requests';
 import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { RoleRequest } from './domain/role-request';
 
 export type AskedRequest = RoleRequest & { readonly name: string };
@@ -13,7 +13,7 @@ const MOST = 100;
 
 /** Requests to become an editor that wait for an answer, the oldest first. */
 export async function listRequests(ctx: ActorCtx): Promise<Result<readonly AskedRequest[], AccessRefusal>> {
-  const own = askOwn(ctx, 'role.read-requests');
+  const own = askSignedIn(ctx, 'role.read-requests');
   if (!own.ok) return own;
   return ok(await withNames(ctx, await listWaitingRoleRequests(ctx.db, MOST)));
 }
@@ -23,7 +23,7 @@ export async function readRequest(
   ctx: ActorCtx,
   id: string,
 ): Promise<Result<AskedRequest, AccessRefusal | { readonly kind: 'not-found' }>> {
-  const own = askOwn(ctx, 'role.read-requests');
+  const own = askSignedIn(ctx, 'role.read-requests');
   if (!own.ok) return own;
   const found = await findRoleRequest(ctx.db, id);
   const [request] = found === null ? [] : await withNames(ctx, [found]);

@@ -5,13 +5,13 @@ import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { take } from '@/lib/server/limits';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mailToken } from './mailed-token';
 import type { KeyInput } from './schema';
 
 /** Mails a new link to confirm the address, for somebody signed in whose address is not confirmed yet. */
 export async function mailConfirmationAgain(ctx: ActorCtx, { key }: KeyInput): Promise<Result<null, AccessRefusal | ChangeRefusal>> {
-  const own = askOwn(ctx, 'account.confirm-again');
+  const own = askSignedIn(ctx, 'account.confirm-again');
   if (!own.ok) return own;
   const { id } = own.value;
   const mayMail = (await take('link-mail', id, ctx)).ok;

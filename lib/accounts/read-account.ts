@@ -8,7 +8,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import type { BoundEntry } from '@/lib/day-book/domain/entry';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { Account } from './domain/account';
 import type { RoleRequest } from './domain/role-request';
 import { earlier, IDLE_MS } from './domain/session-age';
@@ -31,7 +31,7 @@ export async function readAccount(
   ctx: ActorCtx,
   id: AccountId,
 ): Promise<Result<SeenAccount, AccessRefusal | { readonly kind: 'not-found' }>> {
-  const own = askOwn(ctx, 'account.look-up');
+  const own = askSignedIn(ctx, 'account.look-up');
   if (!own.ok) return own;
   const account = await findAccount(ctx.db, id);
   if (account === null || account.email === null) return err({ kind: 'not-found' });

@@ -5,7 +5,7 @@ import { listOwnRoleRequests } from '@/db/role-requests';
 import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { Account } from './domain/account';
 import type { RoleRequest } from './domain/role-request';
 
@@ -21,7 +21,7 @@ const REQUESTS = 10;
 
 /** What somebody's own pages show of their account. */
 export async function readOwnAccount(ctx: ActorCtx): Promise<Result<OwnAccount, AccessRefusal>> {
-  const own = askOwn(ctx, 'account.read-own');
+  const own = askSignedIn(ctx, 'account.read-own');
   if (!own.ok) return own;
   const { id } = own.value;
   const account = await findAccount(ctx.db, id);

@@ -4,14 +4,14 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { RenameInput } from './schema';
 
 export type RenameRefusal = AccessRefusal | ChangeRefusal;
 
 /** Changes the name that others see. */
 export async function renameAccount(ctx: ActorCtx, { key, name }: RenameInput): Promise<Result<null, RenameRefusal>> {
-  const own = askOwn(ctx, 'account.rename');
+  const own = askSignedIn(ctx, 'account.rename');
   if (!own.ok) return own;
   const { id } = own.value;
   return change(ctx, { key, who: id, act: 'accounts.rename', input: { name } }, async (trx): Promise<Result<null, RenameRefusal>> => {

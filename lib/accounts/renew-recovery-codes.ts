@@ -6,14 +6,14 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { hashRecoveryCode, newRecoveryCodes } from '@/lib/server/second-factor';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mailFactorChange } from './mail-factor-change';
 
 type Renewed = Result<{ readonly codes: readonly string[] }, AccessRefusal>;
 
 /** Ten new recovery codes in the place of the earlier ones. They are in the answer and nowhere else. */
 export async function renewRecoveryCodes(ctx: ActorCtx): Promise<Renewed> {
-  const own = askOwn(ctx, 'account.set-second-factor');
+  const own = askSignedIn(ctx, 'account.set-second-factor');
   if (!own.ok) return own;
   const { id } = own.value;
   const codes = newRecoveryCodes();

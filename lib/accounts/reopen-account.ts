@@ -8,7 +8,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { writeMail } from '@/lib/server/mail-text';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { namesPerson } from './domain/public-reason';
 import { holdStewards } from './hold-stewards';
 import type { ClosingInput } from './steward-schema';
@@ -17,7 +17,7 @@ export type ReopenRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'no
 
 /** Lets a person back in whose account was closed, in the role they had. They sign in anew, and get a mail with the reason. */
 export async function reopenAccount(ctx: ActorCtx, input: ClosingInput): Promise<Result<null, ReopenRefusal>> {
-  const own = askOwn(ctx, 'account.close');
+  const own = askSignedIn(ctx, 'account.close');
   if (!own.ok) return own;
   const { key, id, reason } = input;
   const asked = { key, who: own.value.id, act: 'accounts.reopen', input: { id, reason } };

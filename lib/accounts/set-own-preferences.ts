@@ -5,14 +5,14 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { PreferencesInput } from './schema';
 
 export type PreferencesRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'unknown-region' };
 
 /** Keeps where somebody works, in which money they count, and in which units they like to read. */
 export async function setOwnPreferences(ctx: ActorCtx, input: PreferencesInput): Promise<Result<null, PreferencesRefusal>> {
-  const own = askOwn(ctx, 'account.set-preferences');
+  const own = askSignedIn(ctx, 'account.set-preferences');
   if (!own.ok) return own;
   const { id } = own.value;
   const { key, region, currency, units } = input;

@@ -6,7 +6,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import type { TooMany } from '@/lib/server/limits';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { provePassword } from './prove-password';
 import type { AgainInput } from './schema';
 
@@ -14,7 +14,7 @@ export type AgainRefusal = AccessRefusal | TooMany | { readonly kind: 'wrong' };
 
 /** Notes in the session that the password was typed just now: for ten minutes delicate acts do not ask again. */
 export async function signInAgain(ctx: ActorCtx, { password }: AgainInput, session: Buffer): Promise<Result<null, AgainRefusal>> {
-  const own = askOwn(ctx, 'account.sign-in-again');
+  const own = askSignedIn(ctx, 'account.sign-in-again');
   if (!own.ok) return own;
   const secrets = await findSecrets(ctx.db, own.value.id);
   const proved = await provePassword(ctx, own.value.id, secrets?.passwordHash ?? null, password);

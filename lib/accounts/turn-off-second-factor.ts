@@ -6,7 +6,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mailFactorChange } from './mail-factor-change';
 import type { KeyInput } from './schema';
 
@@ -16,7 +16,7 @@ export async function turnOffSecondFactor(
   { key }: KeyInput,
   session: Buffer,
 ): Promise<Result<null, AccessRefusal | ChangeRefusal>> {
-  const own = askOwn(ctx, 'account.set-second-factor');
+  const own = askSignedIn(ctx, 'account.set-second-factor');
   if (!own.ok) return own;
   const { id } = own.value;
   return change(ctx, { key, who: id, act: 'accounts.second-factor-off', input: null }, async (trx) => {

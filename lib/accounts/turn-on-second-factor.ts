@@ -9,7 +9,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { hashRecoveryCode, newRecoveryCodes, readFactorSecret, sealFactorSecret, stepsFromNow } from '@/lib/server/second-factor';
 import { newSession, type CurrentSession } from '@/lib/server/session';
 import { usableStep } from './domain/one-time-step';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mailFactorChange } from './mail-factor-change';
 import type { FactorInput } from './schema';
 
@@ -26,7 +26,7 @@ export async function turnOnSecondFactor(
   session: CurrentSession,
   agent: string,
 ): Promise<Result<FactorOn, FactorRefusal>> {
-  const own = askOwn(ctx, 'account.set-second-factor');
+  const own = askSignedIn(ctx, 'account.set-second-factor');
   if (!own.ok) return own;
   const { id } = own.value;
   const secret = readFactorSecret(typed);

@@ -4,14 +4,14 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
-import { askOwn } from './ask-own';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { RequestInput } from './schema';
 
 export type WithdrawRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'not-found' } | { readonly kind: 'answered' };
 
 /** Takes one's own request back while nobody has answered it. Another's is not there. */
 export async function withdrawRoleRequest(ctx: ActorCtx, { key, id }: RequestInput): Promise<Result<null, WithdrawRefusal>> {
-  const own = askOwn(ctx, 'role.withdraw');
+  const own = askSignedIn(ctx, 'role.withdraw');
   if (!own.ok) return own;
   const { id: accountId } = own.value;
   const asked = { key, who: accountId, act: 'accounts.withdraw-role-request', input: { id } };

@@ -7,7 +7,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { newId } from '@/lib/server/new-id';
 import type { RemarkInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mayModeratorsRead } from './domain/amendment';
 
 export type AddRemarkRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'not-found' | 'own-amendment' };

@@ -1,9 +1,10 @@
 import 'server-only';
 import { writeDayBook } from '@/db/day-book';
 import { lockDoubt, moveDoubt } from '@/db/doubts';
-import { mayNow, type AccessRefusal } from '@/lib/access/domain/policy';
+import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { AnswerDoubtInput } from './doubt-schema';
 
@@ -11,10 +12,9 @@ export type AnswerDoubtRefusal = AccessRefusal | ChangeRefusal | { readonly kind
 
 /** Answers a doubt that waits: from then on it stands on its rule, with the answer. The day book tells that, and none of the words. */
 export async function answerDoubt(ctx: ActorCtx, { key, id, answer }: AnswerDoubtInput): Promise<Result<null, AnswerDoubtRefusal>> {
-  const may = mayNow(ctx.actor, 'doubt.answer', ctx.now);
-  if (!may.ok) return may;
-  if (ctx.actor.kind !== 'account') return err({ kind: 'sign-in' });
-  const by = ctx.actor.id;
+  const own = askSignedIn(ctx, 'doubt.answer');
+  if (!own.ok) return own;
+  const by = own.value.id;
   return change(
     ctx,
     { key, who: by, act: 'regions.answer-doubt', input: { id, answer } },

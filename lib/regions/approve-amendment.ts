@@ -11,7 +11,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { VersionedInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { noteDecision, outdated } from './decide-amendment';
 import { judgeAct } from './domain/amendment';
 import { approvalsNeeded, judgeApproval, type ApprovalOutcome, type ApprovalRefusal } from './domain/approval';

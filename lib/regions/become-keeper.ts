@@ -3,9 +3,10 @@ import { lockAccount } from '@/db/accounts';
 import { writeDayBook } from '@/db/day-book';
 import { findNumberInUse } from '@/db/editions';
 import { insertKeeper } from '@/db/keepers';
-import { can, mayNow, type AccessRefusal } from '@/lib/access/domain/policy';
+import { can, type AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { KeepSheetInput } from './doubt-schema';
 
@@ -13,10 +14,10 @@ export type KeeperRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'no
 
 /** Makes whoever asks a keeper of a sheet: named on it as minding its look-again dates. Who is one already stays one. */
 export async function becomeKeeper(ctx: ActorCtx, { key, region }: KeepSheetInput): Promise<Result<null, KeeperRefusal>> {
-  const { actor, now } = ctx;
-  const may = mayNow(actor, 'sheet.keep', now);
-  if (!may.ok) return may;
-  if (actor.kind !== 'account') return err({ kind: 'sign-in' });
+  const own = askSignedIn(ctx, 'sheet.keep');
+  if (!own.ok) return own;
+  const { value: actor } = own;
+  const { now } = ctx;
   return change(
     ctx,
     { key, who: actor.id, act: 'regions.become-keeper', input: { region } },

@@ -8,7 +8,7 @@ import { change, type ChangeRefusal } from '@/lib/server/change';
 import { newId } from '@/lib/server/new-id';
 import { readEdition } from '@/lib/server/sheets';
 import { amendmentId, type BeginInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { AmendmentId } from './domain/amendment';
 
 /** `no-sheet`: a place without one is begun by `beginPlace`, which asks what it is. */

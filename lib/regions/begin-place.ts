@@ -8,7 +8,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { newId } from '@/lib/server/new-id';
 import { amendmentId, type NewPlaceInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { AmendmentId } from './domain/amendment';
 import type { Membership } from './domain/sheet';
 import { emptySheet } from './domain/sheet-items';

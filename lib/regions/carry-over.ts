@@ -7,7 +7,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { CarryOverInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { Amendment } from './domain/amendment';
 import type { Collision } from './domain/amendment-view';
 import { faultsAt, type Faults } from './domain/fitted-item';

@@ -3,7 +3,7 @@ import { findAmendment } from '@/db/amendments';
 import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { CheckedAmendment } from './domain/amendment-view';
 import { examineFully } from './examine-amendment';
 

@@ -10,7 +10,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { VersionedInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { Amendment } from './domain/amendment';
 import { lockFor, withWinner, type ActRefusal } from './lock-for';
 import { mailDecision } from './mail-decision';

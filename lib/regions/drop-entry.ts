@@ -6,7 +6,7 @@ import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { ItemInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { lockFor, type ActRefusal } from './lock-for';
 
 /** Throws away what was typed for an item and not saved. The item stays as it was saved last. */

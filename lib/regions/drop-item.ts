@@ -8,7 +8,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { ItemInput } from './amendment-schema';
 import type { AmendmentId } from './domain/amendment';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { keysCiting } from './domain/fitted-item';
 import { itemOf, keyIn, readItemKey, withoutItem, type ItemKey } from './domain/sheet-items';
 import { lockFor, type ActRefusal } from './lock-for';

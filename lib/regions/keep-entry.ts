@@ -5,7 +5,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import type { KeepEntryInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { followedBy, isAlike, nextVersion, type EntryMovedOn } from './domain/entry-versions';
 import { lockFor, type ActRefusal } from './lock-for';
 

@@ -5,7 +5,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { readEdition } from '@/lib/server/sheets';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { isOpen, type Amendment } from './domain/amendment';
 import { changedItems } from './domain/changed-items';
 

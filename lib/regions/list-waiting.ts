@@ -7,7 +7,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import type { WaitingQuery } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { isOpen, mayModeratorsRead } from './domain/amendment';
 import type { WaitingRow } from './domain/amendment-view';
 import { approvalsNeeded, firstApproval } from './domain/approval';

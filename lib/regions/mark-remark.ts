@@ -6,7 +6,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { RemarkDoneInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { mayModeratorsRead } from './domain/amendment';
 
 export type MarkRemarkRefusal = AccessRefusal | ChangeRefusal | { readonly kind: 'not-found' | 'own-amendment' };

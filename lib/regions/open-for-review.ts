@@ -7,7 +7,7 @@ import type { AccountId } from '@/lib/access/domain/actor';
 import { POLICY, type AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { isWaiting, mayModeratorsRead, type Amendment } from './domain/amendment';
 import type { ClaimToRead, Review } from './domain/amendment-view';
 import { approvalsNeeded, firstApproval } from './domain/approval';

@@ -4,7 +4,7 @@ import { findAmendment } from '@/db/amendments';
 import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import type { OwnAmendment } from './domain/amendment-view';
 import { changedItems } from './domain/changed-items';
 import { readAlsoOpen, readBase, readStale, readTalk } from './read-around';

@@ -4,7 +4,7 @@ import { listWithdrawals } from '@/db/edition-withdrawals';
 import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { compareEditions } from './compare-editions';
 import type { ComparedEditions } from './domain/compared-editions';
 

@@ -7,7 +7,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { ItemInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { faultsAt, keysCiting, restoredItem, type Faults } from './domain/fitted-item';
 import { itemOf, type ItemKey } from './domain/sheet-items';
 import { lockFor, type ActRefusal } from './lock-for';

@@ -11,7 +11,7 @@ import { words } from '@/lib/kernel/words';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { SaveItemInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { followedBy, isAlike, nextVersion, type EntryMovedOn } from './domain/entry-versions';
 import { faultsAt, fitItem, type Faults, type FittedItem } from './domain/fitted-item';
 import type { ItemKey, SheetItem } from './domain/sheet-items';

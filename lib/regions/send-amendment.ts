@@ -11,7 +11,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { SendInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { judgeAct } from './domain/amendment';
 import type { CheckedAmendment } from './domain/amendment-view';
 import { changedItems } from './domain/changed-items';

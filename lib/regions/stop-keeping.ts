@@ -2,19 +2,19 @@ import 'server-only';
 import { lockAccount } from '@/db/accounts';
 import { writeDayBook } from '@/db/day-book';
 import { deleteKeeper } from '@/db/keepers';
-import { mayNow } from '@/lib/access/domain/policy';
-import { err, ok, type Result } from '@/lib/kernel/result';
+import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { change } from '@/lib/server/change';
 import type { KeeperRefusal } from './become-keeper';
 import type { KeepSheetInput } from './doubt-schema';
 
 /** Whoever asks is no keeper of that sheet any more. Who was none stays none. */
 export async function stopKeeping(ctx: ActorCtx, { key, region }: KeepSheetInput): Promise<Result<null, KeeperRefusal>> {
-  const { actor, now } = ctx;
-  const may = mayNow(actor, 'sheet.keep', now);
-  if (!may.ok) return may;
-  if (actor.kind !== 'account') return err({ kind: 'sign-in' });
+  const own = askSignedIn(ctx, 'sheet.keep');
+  if (!own.ok) return own;
+  const { value: actor } = own;
+  const { now } = ctx;
   return change(
     ctx,
     { key, who: actor.id, act: 'regions.stop-keeping', input: { region } },

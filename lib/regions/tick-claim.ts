@@ -7,7 +7,7 @@ import { err, ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { TickInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { claimsToRead } from './domain/claims-to-read';
 import { lockFor, type ActRefusal, type LockedAmendment } from './lock-for';
 

@@ -6,7 +6,7 @@ import type { AccessRefusal } from '@/lib/access/domain/policy';
 import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import type { WaitingQuery } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { sentFilter } from './domain/sent-filter';
 
 /** A few characters that are others as soon as the sorting table would show something else. */

@@ -5,7 +5,7 @@ import { ok, type Result } from '@/lib/kernel/result';
 import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import type { AmendmentInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { lockFor, type ActRefusal } from './lock-for';
 
 /** Its author gives an amendment up. Nothing of it goes: it can be taken up again. */

@@ -12,7 +12,7 @@ import type { ActorCtx } from '@/lib/server/actor-ctx';
 import { change, type ChangeRefusal } from '@/lib/server/change';
 import { readEdition } from '@/lib/server/sheets';
 import { SUMMARY_MOST, type WithdrawEditionInput } from './amendment-schema';
-import { askSignedIn } from './ask-signed-in';
+import { askSignedIn } from '@/lib/server/ask-signed-in';
 import { checkProposal } from './check-proposal';
 import { errorsIn, isSameWorld, type Examined } from './examine-amendment';
 import { putInUse } from './put-in-use';
