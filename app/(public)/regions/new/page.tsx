@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import type { ReactElement } from 'react';
 import { formWords, one, type Query } from '@/app/(account)/form-words';
 import { beginNewPlace } from '@/app/(workshop)/bench/amendments/actions';
+import { AskToEdit } from '@/components/amend/ask-to-edit';
 import { EntryForm } from '@/components/accounts/entry-form';
 import { PageHeading } from '@/components/ui/page-heading';
 import { can } from '@/lib/access/domain/policy';
@@ -20,7 +21,8 @@ const KINDS = ['country', 'part', 'bloc', 'standard'] as const;
 
 export default async function NewPlacePage({ searchParams }: Props): Promise<ReactElement> {
   const ctx = await makeActorCtx();
-  if (ctx.actor.kind === 'account' && !can(ctx.actor, 'amendment.write')) return <ForEditors />;
+  if (ctx.actor.kind === 'account' && !can(ctx.actor, 'amendment.write'))
+    return <AskToEdit heading={<PageHeading>{words('amend.newPlace.title')}</PageHeading>} />;
   await enter('amendment.write', '/regions/new');
   const query = await searchParams;
   const first = (await findKept(one(query, 'look'))) ?? freshForm({ region: one(query, 'code') ?? '', name: one(query, 'name') ?? '' });
@@ -56,20 +58,6 @@ export default async function NewPlacePage({ searchParams }: Props): Promise<Rea
           { name: 'text', type: 'long-text', label: words('amend.text.label'), hint: words('amend.text.hint') },
         ]}
       />
-    </div>
-  );
-}
-
-function ForEditors(): ReactElement {
-  return (
-    <div className="max-w-text">
-      <PageHeading>{words('amend.newPlace.title')}</PageHeading>
-      <p className="mt-4">{words('amend.begin.maker')}</p>
-      <p className="mt-4">
-        <a className="button button-primary" href="/bench/ask">
-          {words('amend.begin.ask')}
-        </a>
-      </p>
     </div>
   );
 }

@@ -5,6 +5,7 @@ import { one, type Query } from '@/app/(account)/form-words';
 import { begin } from '@/app/(workshop)/bench/amendments/actions';
 import { freshKey } from '@/app/(workshop)/bench/amendments/fresh-key';
 import { draftPage, itemPage } from '@/app/(workshop)/bench/amendments/item-address';
+import { AskToEdit } from '@/components/amend/ask-to-edit';
 import { PressButton } from '@/components/amend/press-button';
 import { StateBadge, type OwnRow } from '@/components/amend/own-list';
 import { PageHeading } from '@/components/ui/page-heading';
@@ -33,7 +34,7 @@ export default async function AmendPage({ params, searchParams }: Props): Promis
   if (sheet === null) notFound();
   const ctx = await makeActorCtx();
   const heading = <PageHeading>{words('amend.begin.title', { name: sheet.name })}</PageHeading>;
-  if (ctx.actor.kind === 'account' && !can(ctx.actor, 'amendment.write')) return <HowToBecomeOne heading={heading} />;
+  if (ctx.actor.kind === 'account' && !can(ctx.actor, 'amendment.write')) return <AskToEdit heading={heading} />;
   const item = itemIn(query);
   await enter('amendment.write', `/regions/${code}/amend${item === null ? '' : `?item=${encodeURIComponent(item)}`}`);
   return (
@@ -104,20 +105,5 @@ function Drafts({ drafts, item }: { readonly drafts: readonly OwnRow[]; readonly
         ))}
       </ul>
     </section>
-  );
-}
-
-/** A maker is told what an editor is, and how to ask to be one. */
-function HowToBecomeOne({ heading }: { readonly heading: ReactElement }): ReactElement {
-  return (
-    <div className="max-w-text">
-      {heading}
-      <p className="mt-4">{words('amend.begin.maker')}</p>
-      <p className="mt-4">
-        <a className="button button-primary" href="/bench/ask">
-          {words('amend.begin.ask')}
-        </a>
-      </p>
-    </div>
   );
 }
